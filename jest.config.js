@@ -1,0 +1,38 @@
+const transformNode = {
+  '^.+\\.tsx?$': [
+    '@swc/jest',
+    {
+      jsc: {
+        target: 'es2022',
+        parser: { syntax: 'typescript', decorators: true },
+        transform: { legacyDecorator: true, decoratorMetadata: false, useDefineForClassFields: false },
+      },
+      module: { type: 'commonjs' },
+      sourceMaps: 'inline',
+    },
+  ],
+};
+// d3 ships ES modules as its main entry; jest gets the UMD builds that lie beside them.
+const d3 = { '^(d3-[a-z-]+|internmap)$': '<rootDir>/node_modules/$1/dist/$1.js' };
+const alias = { '^@/(.*)$': '<rootDir>/$1' };
+const node = { testEnvironment: 'node', transform: transformNode, moduleNameMapper: alias };
+
+/** @type {import('jest').Config} */
+module.exports = {
+  projects: [
+    { ...node, displayName: 'engine', testMatch: ['<rootDir>/tests/{journal,shared,reference,scripts}/**/*.test.ts'] },
+    { ...node, displayName: 'server', testMatch: ['<rootDir>/tests/server/**/*.test.ts'] },
+    { ...node, displayName: 'e2e', testMatch: ['<rootDir>/tests/e2e/**/*.test.ts'] },
+    {
+      preset: 'jest-expo/web',
+      displayName: 'ui',
+      testMatch: ['<rootDir>/tests/{app,components,hooks}/**/*.test.{ts,tsx}'],
+      moduleNameMapper: {
+        ...d3,
+        '\\.(woff2|svg)$': '<rootDir>/tests/asset-stub.js',
+        '^react-native$': 'react-native-web',
+        ...alias,
+      },
+    },
+  ],
+};
