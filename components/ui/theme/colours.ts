@@ -1,0 +1,51 @@
+/** The named colours of one scheme; every text pair meets WCAG AA (tests/components/ui/theme/contrast.test.ts). */
+export type ColourName = keyof typeof lightColours;
+export type Colours = Readonly<Record<ColourName, string>>;
+
+export const lightColours = {
+  paper: '#FBF8F1',
+  sheet: '#FFFFFF',
+  well: '#F2EDE1',
+  rule: '#DDD5C5',
+  edge: '#8A806E',
+  ink: '#1E1B16',
+  inkSoft: '#5C5548',
+  bramble: '#6B1D4A',
+  onBramble: '#FFFFFF',
+  brambleWash: '#F5E8EF',
+  stripBase: '#F7EDF2',
+  leaf: '#2F6B56',
+  leafWash: '#E3EFE9',
+  tide: '#0B6470',
+  tideWash: '#DDEDEE',
+  rust: '#9C3D14',
+  rustWash: '#F8E6DC',
+  amber: '#7A5200',
+  amberWash: '#FFF2CF',
+  focus: '#1F5FBF',
+  scrim: 'rgba(30,27,22,0.45)',
+};
+
+export const darkColours: Colours = {
+  paper: '#15131A',
+  sheet: '#1D1A24',
+  well: '#100E14',
+  rule: '#3A3546',
+  edge: '#7F778F',
+  ink: '#F1ECE4',
+  inkSoft: '#B5ACBC',
+  bramble: '#E39CC3',
+  onBramble: '#2A0F1E',
+  brambleWash: '#3A2233',
+  stripBase: '#2B1D28',
+  leaf: '#86C5AA',
+  leafWash: '#1D3229',
+  tide: '#5CC3CC',
+  tideWash: '#12343A',
+  rust: '#F2955F',
+  rustWash: '#43261A',
+  amber: '#F0C25A',
+  amberWash: '#2E2610',
+  focus: '#8DB8FF',
+  scrim: 'rgba(0,0,0,0.60)',
+};

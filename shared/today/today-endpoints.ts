@@ -1,0 +1,54 @@
+import { z } from 'zod';
+import { defineEndpoint } from '@/shared/contract/define-endpoint';
+import { idSchema, instantSchema, sessionDateSchema } from '@/shared/contract/fields';
+import { noInput } from '@/shared/contract/no-input';
+import { roles } from '@/shared/contract/roles';
+import { entryRowSchema } from '@/shared/entries/entry';
+
+const taskSchema = z.strictObject({
+  kind: z.enum(['expiring', 'past-expiry', 'missing-prices', 'write-lesson', 'seal-draft', 'start']),
+  /** When it must be done. */
+  group: z.enum(['before-next-open', 'from-today', 'when-ready']),
+  title: z.string(),
+  why: z.string(),
+  /** The verb on the line. */
+  action: z.string(),
+  target: z.discriminatedUnion('kind', [
+    z.strictObject({
+      kind: z.literal('entry'),
+      entryId: idSchema,
+      section: z.enum(['plan', 'fills', 'lesson', 'outcome']),
+    }),
+    z.strictObject({ kind: z.literal('underlying'), underlyingId: idSchema }),
+    z.strictObject({ kind: z.literal('new-underlying') }),
+    z.strictObject({ kind: z.literal('new-plan') }),
+  ]),
+});
+export type TodayTask = z.infer<typeof taskSchema>;
+
+export const todayEndpoints = {
+  readToday: defineEndpoint({
+    name: 'readToday',
+    method: 'GET',
+    path: '/today',
+    summary: 'What needs the reader now, in the order it must be done',
+    access: { kind: 'desk', roles, rows: 'shared' },
+    params: noInput,
+    query: noInput,
+    body: null,
+    needsVersion: false,
+    status: 200,
+    response: z.strictObject({
+      now: instantSchema,
+      /** The session in progress or the last one that closed. */
+      session: z.strictObject({ sessionDate: sessionDateSchema, isOver: z.boolean() }),
+      nextSession: z.strictObject({ sessionDate: sessionDateSchema, kind: z.enum(['full', 'early']) }),
+      tasks: z.array(taskSchema),
+      /** Sealed and open entries, nearest exit first. */
+      running: z.array(entryRowSchema),
+      runningCount: z.int(),
+      resolvedOddsCount: z.int(),
+      meanBrierScore: z.number().nullable(),
+    }),
+  }),
+};
