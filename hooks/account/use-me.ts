@@ -1,0 +1,22 @@
+import { queryOptions, useQuery } from '@tanstack/react-query';
+import { call } from '@/hooks/client/api-client';
+import { ApiError } from '@/hooks/client/api-error';
+import { accountEndpoints, type Me } from '@/shared/account/account-endpoints';
+
+export const meQuery = () =>
+  queryOptions({
+    queryKey: ['me'],
+    queryFn: async ({ signal }): Promise<Me | null> => {
+      try {
+        return await call(accountEndpoints.readMe, { signal });
+      } catch (error) {
+        if (error instanceof ApiError && error.code === 'not-signed-in') return null; // nobody: not a failure
+        throw error;
+      }
+    },
+    staleTime: 60_000,
+    retry: 1,
+  });
+
+/** Who is signed in; null when nobody is. */
+export const useMe = () => useQuery(meQuery());

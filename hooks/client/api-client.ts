@@ -1,0 +1,87 @@
+import { ApiError, unreachable } from '@/hooks/client/api-error';
+import {
+  type BodyOf,
+  type Endpoint,
+  type ParamsOf,
+  type QueryInputOf,
+  type ResponseOf,
+} from '@/shared/contract/define-endpoint';
+import { apiErrorSchema } from '@/shared/contract/error-codes';
+import { apiRoot, requestHeader } from '@/shared/contract/request-headers';
+
+/** What one call needs; parts the endpoint does not take are left out. */
+export interface CallInput<E extends Endpoint> {
+  readonly params?: ParamsOf<E>;
+  readonly query?: QueryInputOf<E>;
+  readonly body?: BodyOf<E>;
+  /** The version the change was made from, for endpoints that need it. */
+  readonly version?: number;
+  readonly signal?: AbortSignal;
+}
+
+/**
+ * Calls an endpoint of the contract.
+ * @throws {ApiError} with the server's words, or 'unreachable' when there is no answer.
+ */
+export async function call<E extends Endpoint>(endpoint: E, input: CallInput<E> = {}): Promise<ResponseOf<E>> {
+  const answer = await send(endpoint, input);
+  if (answer.ok) {
+    const json: unknown = endpoint.response === null ? undefined : await answer.json();
+    // The schema is the endpoint's own, so what it gives is ResponseOf<E>; TypeScript cannot follow the conditional type.
+    return (endpoint.response === null ? undefined : endpoint.response.parse(json)) as ResponseOf<E>;
+  }
+  throw await readError(answer);
+}
+
+async function send<E extends Endpoint>(
+  endpoint: E,
+  { params, query, body, version, signal }: CallInput<E>,
+): Promise<Response> {
+  const headers = new Headers();
+  if (endpoint.method !== 'GET') headers.set(requestHeader.name, requestHeader.value);
+  if (version !== undefined) headers.set('if-match', String(version));
+  if (endpoint.body !== 'file' && body !== undefined) headers.set('content-type', 'application/json');
+  try {
+    return await fetch(urlOf(endpoint, params, query), {
+      method: endpoint.method,
+      headers,
+      body: endpoint.body === 'file' ? fileForm(body) : body === undefined ? undefined : JSON.stringify(body),
+      signal,
+      credentials: 'same-origin',
+    });
+  } catch (error) {
+    if (error instanceof DOMException && error.name === 'AbortError') throw error;
+    throw unreachable();
+  }
+}
+
+function urlOf(endpoint: Endpoint, params: unknown, query: unknown): string {
+  const values = new Map(Object.entries(params ?? {}));
+  const path = endpoint.path.replace(/:(\w+)/g, (_, name: string) => encodeURIComponent(String(values.get(name))));
+  const search = new URLSearchParams();
+  for (const [name, value] of Object.entries(query ?? {})) {
+    if (value !== undefined) search.set(name, String(value));
+  }
+  const text = search.toString();
+  return `${apiRoot}${path}${text === '' ? '' : `?${text}`}`;
+}
+
+function fileForm(body: unknown): FormData {
+  if (!(body instanceof File)) throw new TypeError('This endpoint takes a file.');
+  const form = new FormData();
+  form.set('file', body, body.name);
+  return form;
+}
+
+async function readError(answer: Response): Promise<ApiError> {
+  const parsed = apiErrorSchema.safeParse(await answer.json().catch(() => null));
+  if (parsed.success) return new ApiError(parsed.data.error);
+  return answer.status >= 500
+    ? new ApiError({
+        code: 'unavailable',
+        message: 'Brierbook did not answer as it should.',
+        action: 'Wait a moment and try again.',
+        problems: [],
+      })
+    : unreachable();
+}
