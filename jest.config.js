@@ -1,5 +1,5 @@
 const transformNode = {
-  '^.+\\.tsx?$': [
+  '(\\.tsx?|\\.mjs|canonicalize/lib/.*\\.js)$': [
     '@swc/jest',
     {
       jsc: {
@@ -15,7 +15,13 @@ const transformNode = {
 // d3 ships ES modules as its main entry; jest gets the UMD builds that lie beside them.
 const d3 = { '^(d3-[a-z-]+|internmap)$': '<rootDir>/node_modules/$1/dist/$1.js' };
 const alias = { '^@/(.*)$': '<rootDir>/$1' };
-const node = { testEnvironment: 'node', transform: transformNode, moduleNameMapper: alias };
+const node = {
+  testEnvironment: 'node',
+  transform: transformNode,
+  // canonicalize ships ES modules only.
+  transformIgnorePatterns: ['/node_modules/(?!canonicalize/)'],
+  moduleNameMapper: { ...alias, '^canonicalize$': '<rootDir>/node_modules/canonicalize/lib/canonicalize.js' },
+};
 
 /** @type {import('jest').Config} */
 module.exports = {
