@@ -1,0 +1,52 @@
+import { DomainError } from '@/journal/errors/domain-error';
+import { Decimal } from '@/journal/money/decimal';
+import { roundMoney } from '@/journal/money/rounding';
+
+/**
+ * An amount dealt out over the parts of a quantity, part by part, to the cent and without loss: a part gets the rounded share of
+ * all quantity dealt so far, less what was given before. The part that completes the quantity gets all that is left, also
+ * fractions of a cent that the amount itself had. Immutable: each step gives the next state. (Common practice for split fees.)
+ */
+export interface AmountSplit {
+  readonly amount: Decimal;
+  readonly quantity: Decimal;
+  readonly dealtQuantity: Decimal;
+  readonly givenAmount: Decimal;
+}
+
+/**
+ * @param amount any sign (a rebate is negative), currency.
+ * @param quantity above 0.
+ * @throws {DomainError} `quantity-not-positive`.
+ */
+export function startAmountSplit({ amount, quantity }: { amount: Decimal; quantity: Decimal }): AmountSplit {
+  if (!quantity.greaterThan(0)) throw new DomainError('quantity-not-positive', { quantity: quantity.toString() });
+  return { amount, quantity, dealtQuantity: new Decimal(0), givenAmount: new Decimal(0) };
+}
+
+/**
+ * Deals the next part.
+ * @param partQuantity above 0, at most what is left.
+ * @returns the part's amount and the split after it.
+ * @throws {DomainError} `quantity-not-positive`, `part-exceeds-quantity`.
+ */
+export function dealPart(split: AmountSplit, partQuantity: Decimal): { part: Decimal; split: AmountSplit } {
+  if (!partQuantity.greaterThan(0))
+    throw new DomainError('quantity-not-positive', { quantity: partQuantity.toString() });
+  const dealtQuantity = split.dealtQuantity.plus(partQuantity);
+  if (dealtQuantity.greaterThan(split.quantity)) {
+    throw new DomainError('part-exceeds-quantity', {
+      quantity: split.quantity.toString(),
+      dealt: dealtQuantity.toString(),
+    });
+  }
+  const givenAmount = dealtQuantity.equals(split.quantity)
+    ? split.amount
+    : roundMoney(split.amount.times(dealtQuantity).dividedBy(split.quantity));
+  return { part: givenAmount.minus(split.givenAmount), split: { ...split, dealtQuantity, givenAmount } };
+}
+
+/** What has not been dealt yet. */
+export function undealtAmount(split: AmountSplit): Decimal {
+  return split.amount.minus(split.givenAmount);
+}
