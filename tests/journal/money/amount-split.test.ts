@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { type AmountSplit, dealPart, startAmountSplit, undealtAmount } from '@/journal/money/amount-split';
 import { Decimal, toDecimal } from '@/journal/money/decimal';
 import { roundMoney } from '@/journal/money/rounding';

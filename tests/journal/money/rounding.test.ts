@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { Decimal, toDecimal } from '@/journal/money/decimal';
 import { largestRemainder, roundMoney } from '@/journal/money/rounding';
 
