@@ -46,8 +46,9 @@ function exactCumulative({ distance, count }: { distance: number; count: number 
   const half = Math.floor(count * distance) + 1;
   const size = 2 * half - 1;
   const overshoot = half - count * distance;
-  let { matrix, exponent } = matrixPower(stepMatrix({ size, overshoot }), count);
-  let result = matrix[half - 1]?.[half - 1] ?? 0;
+  const power = matrixPower(stepMatrix({ size, overshoot }), count);
+  let { exponent } = power;
+  let result = power.matrix[half - 1]?.[half - 1] ?? 0;
   // n! / n^n, one factor at a time, with the binary exponent kept apart against underflow.
   for (let index = 1; index <= count; index += 1) {
     result *= index / count;

@@ -30,7 +30,7 @@ export function scoredForecasts(forecasts: readonly number[], outcomes: readonly
  */
 export function scoredForecast(forecast: number, outcome: Outcome | undefined, index = 0): ScoredForecast {
   if (!(forecast >= 0 && forecast <= 1)) throw new DomainError('probability-invalid', { index, probability: forecast });
-  const value = Number(outcome);
-  if (value !== 0 && value !== 1) throw new DomainError('outcome-invalid', { index, outcome: String(outcome) });
-  return { forecast, outcome: value };
+  if (outcome === true || outcome === 1) return { forecast, outcome: 1 };
+  if (outcome === false || outcome === 0) return { forecast, outcome: 0 };
+  throw new DomainError('outcome-invalid', { index, outcome: String(outcome) });
 }

@@ -96,6 +96,12 @@ describe('scores against published and independently computed values', () => {
       expectWithin(sum, actual.brierScore, scoreTolerance);
     }
     expectWithin(meanLogScore(forecasts, outcomesOf(one)), numberOf(one, 'log_score'), scoreTolerance);
+    const { brierScore, uncertainty } = binnedDecomposition(forecasts, outcomesOf(one));
+    expectWithin(
+      brierSkill({ score: brierScore, referenceScore: uncertainty }) ?? NaN,
+      numberOf(one, 'skill'),
+      scoreTolerance,
+    );
   });
 
   it.each(casesOf('binned'))('puts the forecasts of $id into the right-closed bins', (one) => {

@@ -1,6 +1,7 @@
 import * as fc from 'fast-check';
 import { type Fill } from '@/journal/fills/fill';
 import { matchLots } from '@/journal/fills/lots';
+import { sharesFromExercise } from '@/journal/fills/underlying-shares';
 import { Decimal, toDecimal } from '@/journal/money/decimal';
 import { roundMoney } from '@/journal/money/rounding';
 import { fillsInOrder, option, zqxaStock } from '@/tests/journal/fills/fill-fixtures';
@@ -72,18 +73,35 @@ describe('matchLots on options that end', () => {
   const longPut = option('put', '95');
 
   it('closes an assigned put and an expired put at 0 and carries the shares at the strike: 77.34, -30.66, -45.02', () => {
-    const fills = fillsInOrder([
+    const optionFills = fillsInOrder([
       { kind: 'sell', instrument: shortPut, quantity: '1', price: '0.78', fees: '0.66' },
       { kind: 'buy', instrument: longPut, quantity: '1', price: '0.30', fees: '0.66' },
-      { kind: 'assignment', instrument: shortPut, quantity: '1', price: '0', fees: '0' },
       { kind: 'expiry', instrument: longPut, quantity: '1', price: '0', fees: '0' },
-      { kind: 'buy', instrument: zqxaStock, quantity: '100', price: '97.00', fees: '0' },
-      { kind: 'sell', instrument: zqxaStock, quantity: '100', price: '96.55', fees: '0.02' },
     ]);
+    const assignment: Fill = {
+      id: 'assigned',
+      kind: 'assignment',
+      instrument: shortPut,
+      quantity: '1',
+      price: '0',
+      fees: '0',
+      tradedAt: '2026-12-18T21:00:00.000Z',
+      sequence: 1,
+    };
+    const shares = sharesFromExercise(assignment, { id: 'shares' });
+    const sale: Fill = {
+      ...shares,
+      id: 'sold',
+      kind: 'sell',
+      price: '96.55',
+      fees: '0.02',
+      tradedAt: '2026-12-21T14:30:00.000Z',
+    };
+    const fills = [...optionFills, assignment, shares, sale];
     const { closed, open, realisedProfit, cashFlow } = matchLots(fills, { method: 'fifo' });
     expect(closed.map((lot) => [lot.closeKind, lot.direction, lot.realisedProfit])).toEqual([
-      ['assignment', 'short', '77.34'],
       ['expiry', 'long', '-30.66'],
+      ['assignment', 'short', '77.34'],
       ['sell', 'long', '-45.02'],
     ]);
     expect(open).toEqual([]);
