@@ -1,5 +1,5 @@
 const transformNode = {
-  '(\\.tsx?|\\.mjs|canonicalize/lib/.*\\.js)$': [
+  '(\\.tsx?|\\.mjs|(canonicalize|temporal-polyfill|temporal-utils)/.*\\.js)$': [
     '@swc/jest',
     {
       jsc: {
@@ -18,8 +18,8 @@ const alias = { '^@/(.*)$': '<rootDir>/$1' };
 const node = {
   testEnvironment: 'node',
   transform: transformNode,
-  // canonicalize ships ES modules only.
-  transformIgnorePatterns: ['/node_modules/(?!canonicalize/)'],
+  // These ship ES modules only.
+  transformIgnorePatterns: ['/node_modules/(?!(canonicalize|temporal-polyfill|temporal-utils)/)'],
   moduleNameMapper: { ...alias, '^canonicalize$': '<rootDir>/node_modules/canonicalize/lib/canonicalize.js' },
 };
 

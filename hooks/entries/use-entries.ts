@@ -3,8 +3,10 @@ import {
   queryOptions,
   useInfiniteQuery,
   useQuery,
+  useQueryClient,
   type QueryClient,
 } from '@tanstack/react-query';
+import { useCallback } from 'react';
 import { call } from '@/hooks/client/api-client';
 import { useEndpointMutation } from '@/hooks/client/use-endpoint-mutation';
 import { type Entry, type EntryState } from '@/shared/entries/entry';
@@ -51,12 +53,6 @@ async function refreshLists(client: QueryClient): Promise<void> {
 }
 
 export const useCreateEntry = () => useEndpointMutation(entryEndpoints.createEntry, afterEntryChanged);
-/** Saved as one types: only the entry itself is kept fresh, lists wait until they are looked at. */
-export const useSaveDraft = () =>
-  useEndpointMutation(entryEndpoints.saveDraft, (client, entry) => {
-    client.setQueryData(entryQuery(entry.row.id).queryKey, entry);
-    void client.invalidateQueries({ queryKey: [...entriesKey, 'list'], refetchType: 'none' });
-  });
 export const useDiscardDraft = () =>
   useEndpointMutation(entryEndpoints.discardDraft, async (client, _, { params }) => {
     if (params !== undefined) client.removeQueries({ queryKey: entryQuery(params.entryId).queryKey });
@@ -67,3 +63,15 @@ export const useAbandonEntry = () => useEndpointMutation(entryEndpoints.abandonE
 export const useAddFill = () => useEndpointMutation(entryEndpoints.addFill, afterEntryChanged);
 export const useRemoveFill = () => useEndpointMutation(entryEndpoints.removeFill, afterEntryChanged);
 export const useSaveLesson = () => useEndpointMutation(entryEndpoints.saveLesson, afterEntryChanged);
+
+/** Puts an entry saved outside a mutation where the queries find it; lists wait until they are looked at. */
+export function useKeepEntry(): (entry: Entry) => void {
+  const client = useQueryClient();
+  return useCallback(
+    (entry) => {
+      client.setQueryData(entryQuery(entry.row.id).queryKey, entry);
+      void client.invalidateQueries({ queryKey: [...entriesKey, 'list'], refetchType: 'none' });
+    },
+    [client],
+  );
+}

@@ -17,7 +17,7 @@ export interface OutcomeQuestion {
   readonly forecast: Forecast;
   /** Effective fills of the entry, oldest first. */
   readonly fills: readonly Fill[];
-  /** Bars after the session of the spot, oldest first. */
+  /** Bars of sessions that close after the moment of the spot price, oldest first. */
   readonly barsSince: readonly OutcomeBar[];
 }
 
@@ -30,6 +30,8 @@ export interface ResolvedOdds {
   readonly logScore: number | null;
   /** Why there is no answer: what is waited for. */
   readonly waitsFor: string | null;
+  /** Of a touched level: judged by highs and lows, or by closes where a bar has no range. */
+  readonly monitoredBy: 'range' | 'closes' | null;
 }
 
 export interface MoveOutcome {
