@@ -1,6 +1,6 @@
 import { toModelNumber } from '@/journal/money/decimal';
 import { logReturns } from '@/journal/returns/log-returns';
-import { quantile } from '@/journal/returns/sample-statistics';
+import { quantile } from '@/journal/returns/quantile';
 import { type FileBar } from '@/server/prices/reading/read-bars';
 
 const suspectDeviations = 6;

@@ -1,6 +1,6 @@
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
 import { columnsFromHeader, findHeader, type BarColumn } from '@/server/prices/reading/find-header';
-import { PriceFileError, unreadable } from '@/server/prices/reading/price-file-error';
+import { PriceFileError, readingInvalid, unreadable } from '@/server/prices/reading/price-file-error';
 import { detectDecimalMark } from '@/server/prices/reading/price-text';
 import { readBars, type FileBar, type RefusedRow } from '@/server/prices/reading/read-bars';
 import { readingLimits } from '@/server/prices/reading/reading-limits';
@@ -43,7 +43,7 @@ function headerOf(
     const index = table.rows.findIndex(({ row }) => row === wanted.headerRow);
     const row = table.rows[index];
     if (row === undefined || isBlankRow(row)) {
-      throw unreadable(`Row ${wanted.headerRow} holds no header. Choose the row that names the columns.`);
+      throw readingInvalid(`Row ${wanted.headerRow} holds no header. Choose the row that names the columns.`);
     }
     return { index, ...columnsFromHeader(row) };
   }
@@ -164,7 +164,7 @@ export function interpretTable(
   const keepsColumns =
     chosen !== null && (chosen.headerRow === shown?.reading.headerRow || answered.includes('columns'));
   if (keepsColumns && chosen.columns.length !== width) {
-    throw unreadable(
+    throw readingInvalid(
       `The header in row ${headerRow.row} has ${width} columns, and ${chosen.columns.length} meanings were given. Choose one for each.`,
     );
   }
@@ -172,7 +172,7 @@ export function interpretTable(
   const twice = (['date', 'open', 'high', 'low', 'close'] as const).find(
     (column) => columns.indexOf(column) !== columns.lastIndexOf(column),
   );
-  if (twice !== undefined) throw unreadable(`Two columns are marked as ${twice}. Choose one of them.`);
+  if (twice !== undefined) throw readingInvalid(`Two columns are marked as ${twice}. Choose one of them.`);
 
   const dates = detectDateOrder(cellsOf(filled, columns, ['date']));
   const marks = detectDecimalMark(cellsOf(filled, columns, ['open', 'high', 'low', 'close']));

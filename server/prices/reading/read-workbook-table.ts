@@ -2,7 +2,7 @@ import { type CellValue, type Workbook, type Worksheet } from 'exceljs';
 import { toDecimal } from '@/journal/money/decimal';
 import { headerScore } from '@/server/prices/reading/find-header';
 import { inspectWorkbook } from '@/server/prices/reading/inspect-workbook';
-import { PriceFileError, unreadable } from '@/server/prices/reading/price-file-error';
+import { PriceFileError, readingInvalid, unreadable } from '@/server/prices/reading/price-file-error';
 import { readingLimits } from '@/server/prices/reading/reading-limits';
 import { type SourceCell, type SourceRow, type SourceTable } from '@/server/prices/reading/source-table';
 
@@ -102,11 +102,11 @@ export async function readWorkbookTable(bytes: Buffer, wantedSheet: string | nul
       ? (candidates[0] ?? visible.find(({ actualRowCount }) => actualRowCount > 0))
       : visible.find(({ name }) => name === wantedSheet);
   if (sheet === undefined) {
-    throw unreadable(
-      wantedSheet === null
-        ? 'The workbook has no sheet with values. Choose one with a header and one row a session.'
-        : `The workbook has no sheet "${wantedSheet}". Choose one of: ${visible.map(({ name }) => name).join(', ')}.`,
-    );
+    throw wantedSheet === null
+      ? unreadable('The workbook has no sheet with values. Choose one with a header and one row a session.')
+      : readingInvalid(
+          `The workbook has no sheet "${wantedSheet}". Choose one of: ${visible.map(({ name }) => name).join(', ')}.`,
+        );
   }
   const sheets = visible.map(({ name }) => name);
   const candidateSheets = candidates.map(({ name }) => name);

@@ -140,7 +140,7 @@ describe('a row that cannot be taken', () => {
   it.each([
     ['2026-02-30', '5', 'the date 2026-02-30 does not exist'],
     ['31/02/2026', '5', 'the date 31/02/2026 does not exist'],
-    ['2026-01-10', '5', 'the date 2026-01-10 is no session: the exchange was closed (Saturday)'],
+    ['2026-01-10', '5', 'the date 2026-01-10 is no session: the exchange was closed (weekend)'],
     ['2026-12-10', '5', 'the date 2026-12-10 lies in the future'],
     ['1989-12-29', '5', 'the date 1989-12-29 is before 1990-01-01'],
     ['2026-01-05', '5', 'the date 2026-01-05 stands in row 2 already'],
