@@ -13,9 +13,9 @@ export type TextSize = keyof typeof textSizes;
 /** Font families as registered by `components/ui/theme/fonts`. */
 export const fontFamilies = {
   serif: 'YoungSerif',
-  sans: 'PlexSans',
-  sansMedium: 'PlexSans-Medium',
-  sansSemiBold: 'PlexSans-SemiBold',
+  sans: 'BrierbookSans',
+  sansMedium: 'BrierbookSans-Medium',
+  sansSemiBold: 'BrierbookSans-SemiBold',
 } as const;
 
 export const space = {
