@@ -26,6 +26,20 @@ const taskSchema = z.strictObject({
 });
 export type TodayTask = z.infer<typeof taskSchema>;
 
+export const todaySchema = z.strictObject({
+  now: instantSchema,
+  /** The session in progress or the last one that closed. */
+  session: z.strictObject({ sessionDate: sessionDateSchema, isOver: z.boolean() }),
+  nextSession: z.strictObject({ sessionDate: sessionDateSchema, kind: z.enum(['full', 'early']) }),
+  tasks: z.array(taskSchema),
+  /** Sealed and open entries, nearest exit first. */
+  running: z.array(entryRowSchema),
+  runningCount: z.int(),
+  resolvedOddsCount: z.int(),
+  meanBrierScore: z.number().nullable(),
+});
+export type Today = z.infer<typeof todaySchema>;
+
 export const todayEndpoints = {
   readToday: defineEndpoint({
     name: 'readToday',
@@ -38,17 +52,6 @@ export const todayEndpoints = {
     body: null,
     needsVersion: false,
     status: 200,
-    response: z.strictObject({
-      now: instantSchema,
-      /** The session in progress or the last one that closed. */
-      session: z.strictObject({ sessionDate: sessionDateSchema, isOver: z.boolean() }),
-      nextSession: z.strictObject({ sessionDate: sessionDateSchema, kind: z.enum(['full', 'early']) }),
-      tasks: z.array(taskSchema),
-      /** Sealed and open entries, nearest exit first. */
-      running: z.array(entryRowSchema),
-      runningCount: z.int(),
-      resolvedOddsCount: z.int(),
-      meanBrierScore: z.number().nullable(),
-    }),
+    response: todaySchema,
   }),
 };

@@ -1,0 +1,40 @@
+import { setTimeout as pause } from 'node:timers/promises';
+import { type DataSource, type EntityManager, QueryFailedError } from 'typeorm';
+
+/** Deadlock, lock wait timeout, and a row changed since the snapshot: the same work may succeed when it is done again. */
+const worthRepeating = new Set([1213, 1205, 1020]);
+const MOST_TRIES = 4;
+
+/**
+ * The one way to write: all of it or none, repeated a few times when the database asks for that. Nothing inside may use
+ * another connection, send mail or call out, since it can run more than once.
+ */
+export async function inTransaction<T>(
+  dataSource: DataSource,
+  work: (manager: EntityManager) => Promise<T>,
+): Promise<T> {
+  for (let attempt = 1; ; attempt += 1) {
+    try {
+      return await dataSource.transaction(work);
+    } catch (error) {
+      if (attempt >= MOST_TRIES || !isWorthRepeating(error)) throw error;
+      await pause(spread(attempt));
+    }
+  }
+}
+
+function isWorthRepeating(error: unknown): boolean {
+  if (!(error instanceof QueryFailedError)) return false;
+  const { driverError } = error;
+  return 'errno' in driverError && typeof driverError.errno === 'number' && worthRepeating.has(driverError.errno);
+}
+
+/** Milliseconds before the next try, apart for each process so that two do not meet again. */
+function spread(attempt: number): number {
+  return attempt * 10 + (process.pid % 17) + ((attempt * 7) % 11);
+}
+
+/** Whether an insert met a row that is already there. */
+export function isDuplicate(error: unknown): boolean {
+  return error instanceof QueryFailedError && 'errno' in error.driverError && error.driverError.errno === 1062;
+}

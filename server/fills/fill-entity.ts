@@ -1,0 +1,25 @@
+import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { idColumn, instantColumn } from '@/server/database/columns';
+import { type EntryFill } from '@/shared/entries/entry';
+
+/** One execution, expiry, exercise or assignment of an entry. */
+@Entity({ name: 'fill' })
+@Index('uq_fill_desk_id', ['deskId', 'id'], { unique: true })
+@Index('ix_fill_entry', ['deskId', 'entryId', 'tradedAt'])
+export class FillEntity {
+  @PrimaryColumn(idColumn('id')) id!: string;
+  @Column(idColumn('desk_id')) deskId!: string;
+  @Column(idColumn('entry_id')) entryId!: string;
+  @Column({ type: 'varchar', length: 10 }) kind!: EntryFill['kind'];
+  @Column({ type: 'json' }) instrument!: EntryFill['instrument'];
+  @Column({ type: 'decimal', precision: 30, scale: 12 }) quantity!: string;
+  @Column({ type: 'decimal', precision: 30, scale: 12 }) price!: string;
+  @Column({ type: 'decimal', precision: 30, scale: 12 }) fees!: string;
+  @Column(instantColumn('traded_at')) tradedAt!: Date;
+  @Column({ name: 'time_zone', type: 'varchar', length: 64 }) timeZone!: string;
+  /** Order in which fills were added, for those of one instant. */
+  @Column({ type: 'int' }) sequence!: number;
+  /** The exercise or assignment that made this stock fill. */
+  @Column({ ...idColumn('made_by'), nullable: true }) madeBy!: string | null;
+  @Column(instantColumn('added_at')) addedAt!: Date;
+}

@@ -1,0 +1,53 @@
+import { type Fill } from '@/journal/fills/fill';
+import { toDecimal, toDecimalText } from '@/journal/money/decimal';
+import { type DeskScope } from '@/server/database/desk-scope';
+import { FillEntity } from '@/server/fills/fill-entity';
+
+export interface StoredFill {
+  readonly fill: Fill & Pick<FillEntity, 'instrument'>;
+  readonly timeZone: string;
+  readonly madeBy: string | null;
+}
+
+const plain = (text: string) => toDecimalText(toDecimal(text));
+
+/** The fills of one desk's entries. */
+export class FillStore {
+  constructor(private readonly scope: DeskScope) {}
+
+  private get rows() {
+    return this.scope.repository(FillEntity);
+  }
+
+  /** Oldest first. */
+  async list(entryId: string): Promise<StoredFill[]> {
+    const rows = await this.rows.find({ entryId }, { order: { tradedAt: 'ASC', sequence: 'ASC' } });
+    return rows.map((row) => ({
+      fill: {
+        id: row.id,
+        kind: row.kind,
+        instrument: row.instrument,
+        quantity: plain(row.quantity),
+        price: plain(row.price),
+        fees: plain(row.fees),
+        tradedAt: row.tradedAt.toISOString(),
+        sequence: row.sequence,
+      },
+      timeZone: row.timeZone,
+      madeBy: row.madeBy,
+    }));
+  }
+
+  find(id: string): Promise<FillEntity | null> {
+    return this.rows.findOne({ id });
+  }
+
+  async insert(fills: readonly Omit<FillEntity, 'deskId'>[]): Promise<void> {
+    await this.rows.insert(fills);
+  }
+
+  /** Removes a fill with the shares it made; gives the number of rows. */
+  async remove(entryId: string, id: string): Promise<number> {
+    return (await this.rows.remove({ entryId, madeBy: id })) + (await this.rows.remove({ entryId, id }));
+  }
+}

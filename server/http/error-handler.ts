@@ -1,0 +1,74 @@
+import { type ErrorRequestHandler } from 'express';
+import { ZodError } from 'zod';
+import { ApiFailure } from '@/server/errors/api-failure';
+import { type Logger } from '@/server/runtime/logger';
+import { apiErrors, type ApiErrorBody, type ApiErrorCode } from '@/shared/contract/error-codes';
+import { requestIdOf } from '@/server/http/request-id';
+
+const RETRY_SECONDS = '5';
+
+/** The one place that turns failures into answers; what is unknown is logged and told without detail. */
+export function errorHandler(logger: Logger): ErrorRequestHandler {
+  return (error: unknown, request, response, next) => {
+    if (response.headersSent) {
+      next(error);
+      return;
+    }
+    const failure = asFailure(error);
+    const requestId = requestIdOf(request);
+    const { status, action } = apiErrors[failure.code];
+    if (status >= 500) logger.error({ requestId, error: describe(error) }, 'request failed');
+    if (status === 429 || status === 503) response.set('Retry-After', RETRY_SECONDS);
+    const body: ApiErrorBody = {
+      error: {
+        code: failure.code,
+        message: failure.message,
+        action,
+        problems: [...failure.problems],
+        requestId,
+        ...(failure.current === undefined ? {} : { current: failure.current }),
+      },
+    };
+    response.status(status).set('Cache-Control', 'no-store').json(body);
+  };
+}
+
+function asFailure(error: unknown): ApiFailure {
+  if (error instanceof ApiFailure) return error;
+  if (error instanceof ZodError)
+    return new ApiFailure('input-invalid', 'Some fields need correcting.', problemsOf(error));
+  const code = codeOfFramework(error);
+  if (code !== null) return new ApiFailure(code, frameworkMessages[code]);
+  return new ApiFailure('internal', 'Something went wrong on our side.');
+}
+
+/** Every problem with its path; an unknown key is named. */
+function problemsOf(error: ZodError): { field: string; message: string }[] {
+  return error.issues.map((issue) => ({
+    field: issue.path.join('.'),
+    message:
+      issue.code === 'unrecognized_keys'
+        ? `Unknown: ${issue.keys.map((key) => key.slice(0, 60)).join(', ')}.`
+        : issue.message,
+  }));
+}
+
+const frameworkMessages = {
+  'request-malformed': 'The request cannot be read.',
+  'content-type-refused': 'This kind of content is not taken here.',
+  'too-large': 'What was sent is larger than is taken here.',
+} as const satisfies Partial<Record<ApiErrorCode, string>>;
+
+/** Express and its parsers report by a status on the error. */
+function codeOfFramework(error: unknown): keyof typeof frameworkMessages | null {
+  if (!(error instanceof Error) || !('status' in error)) return null;
+  if (error.status === 413) return 'too-large';
+  if (error.status === 415) return 'content-type-refused';
+  return typeof error.status === 'number' && error.status >= 400 && error.status < 500 ? 'request-malformed' : null;
+}
+
+function describe(error: unknown): Record<string, unknown> {
+  return error instanceof Error
+    ? { name: error.name, message: error.message, stack: error.stack }
+    : { value: String(error) };
+}

@@ -1,0 +1,16 @@
+import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { idColumn, instantColumn } from '@/server/database/columns';
+import { type EntryOutcome } from '@/journal/outcome/entry-outcome';
+
+/** Expected against realised for one entry, computed again whenever a bar or a fill changes. */
+@Entity({ name: 'outcome' })
+@Index('uq_outcome_desk_id', ['deskId', 'id'], { unique: true })
+@Index('uq_outcome_entry', ['deskId', 'entryId'], { unique: true })
+export class OutcomeEntity {
+  @PrimaryColumn(idColumn('id')) id!: string;
+  @Column(idColumn('desk_id')) deskId!: string;
+  @Column(idColumn('entry_id')) entryId!: string;
+  @Column({ type: 'json' }) outcome!: EntryOutcome;
+  @Column({ name: 'is_complete', type: 'boolean' }) isComplete!: boolean;
+  @Column(instantColumn('computed_at')) computedAt!: Date;
+}

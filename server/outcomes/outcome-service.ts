@@ -1,0 +1,96 @@
+import { type EntryOutcome, type OutcomeBar } from '@/journal/outcome/entry-outcome';
+import { resolveEntry } from '@/journal/outcome/resolve-entry';
+import { toModelNumber } from '@/journal/money/decimal';
+import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
+import { type DeskScope } from '@/server/database/desk-scope';
+import { EntryEntity } from '@/server/entries/entry-entity';
+import { EntryStore } from '@/server/entries/entry-store';
+import { FillStore } from '@/server/fills/fill-store';
+import { OutcomeEntity } from '@/server/outcomes/outcome-entity';
+import { ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
+import { BarStore } from '@/server/prices/bar-store';
+import { type Clock } from '@/server/runtime/clock';
+import { type Ids } from '@/server/runtime/ids';
+import { SealStore, type StoredSeal } from '@/server/seals/seal-store';
+import { type Bar } from '@/shared/underlyings/underlying';
+import { oddsStatement } from '@/shared/entries/odds-statement';
+
+/** A hold and what follows its expiry fits in this many sessions many times over. */
+const BARS = 520;
+
+/** Sets expected against realised, again whenever a seal, a fill or a bar changes what is known. */
+export class OutcomeService {
+  constructor(private readonly dependencies: { readonly clock: Clock; readonly ids: Ids }) {}
+
+  /** Every sealed entry on an underlying whose story the new bars go on telling. */
+  async onBarsChanged(scope: DeskScope, underlyingId: string, fromSessionDate: string): Promise<void> {
+    const entries = await new EntryStore(scope).listSealedOn(underlyingId);
+    const touched = entries.filter(
+      ({ expirySessionDate }) => expirySessionDate === null || expirySessionDate >= fromSessionDate,
+    );
+    if (touched.length === 0) return;
+    const bars = await new BarStore(scope).newest(underlyingId, BARS);
+    await scope.inTransaction(async (inner) => {
+      for (const entry of touched) await this.recomputeWith(inner, entry, bars);
+    });
+  }
+
+  async recompute(scope: DeskScope, entryId: string): Promise<void> {
+    const entry = await scope.repository(EntryEntity).get(entryId);
+    await this.recomputeWith(scope, entry, await new BarStore(scope).newest(entry.underlyingId, BARS));
+  }
+
+  private async recomputeWith(scope: DeskScope, entry: EntryEntity, bars: readonly Bar[]): Promise<void> {
+    const seal = await new SealStore(scope).findByEntry(entry.id);
+    if (seal === null) return;
+    const { input, forecast } = seal.content;
+    const fills = (await new FillStore(scope).list(entry.id)).map(({ fill }) => fill);
+    const barsSince = bars
+      .filter((bar) => (usOptionsCalendar.sessionOn(bar.sessionDate)?.closesAt ?? '') > input.spot.at)
+      .map(outcomeBar);
+    const outcome = resolveEntry({ input, forecast, fills, barsSince }, usOptionsCalendar);
+    await this.store(scope, entry, seal, outcome);
+    const landed = outcome.move?.inSigmas ?? null;
+    const now = outcome.moveSoFar?.inSigmas ?? null;
+    await new EntryStore(scope).note(entry.id, {
+      strip: entry.strip === null ? null : { ...entry.strip, landed, now },
+      realisedProfit: outcome.profit?.realised ?? null,
+    });
+  }
+
+  private async store(scope: DeskScope, entry: EntryEntity, seal: StoredSeal, outcome: EntryOutcome): Promise<void> {
+    const { clock, ids } = this.dependencies;
+    await scope
+      .repository(OutcomeEntity)
+      .upsert(
+        [{ id: ids.next(), entryId: entry.id, outcome, isComplete: outcome.isComplete, computedAt: clock.now() }],
+        { key: ['desk_id', 'entry_id'], overwrite: ['outcome', 'is_complete', 'computed_at'] },
+      );
+    await scope.repository(ScoredOddsEntity).upsert(
+      outcome.odds.map(({ odds, happened }) => ({
+        id: ids.next(),
+        entryId: entry.id,
+        traderId: entry.traderId,
+        oddsKey: odds.key,
+        statement: oddsStatement(odds, seal.content.input),
+        dueSessionDate: odds.dueSessionDate,
+        probability: odds.probability.base,
+        marketImplied: odds.marketImplied,
+        happened,
+        isLateSeal: entry.isLateSeal,
+      })),
+      { key: ['desk_id', 'entry_id', 'odds_key'], overwrite: ['happened', 'is_late_seal'] },
+    );
+  }
+}
+
+function outcomeBar({ sessionDate, close, high, low, settlement }: Bar): OutcomeBar {
+  const numberOrNull = (text: string | null) => (text === null ? null : toModelNumber(text));
+  return {
+    sessionDate,
+    close: toModelNumber(close),
+    high: numberOrNull(high),
+    low: numberOrNull(low),
+    settlement: numberOrNull(settlement),
+  };
+}

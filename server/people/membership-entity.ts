@@ -1,0 +1,16 @@
+import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { idColumn, instantColumn } from '@/server/database/columns';
+import { type Role } from '@/shared/contract/roles';
+
+/** A person's place on a desk. */
+@Entity({ name: 'membership' })
+@Index('uq_membership_desk_id', ['deskId', 'id'], { unique: true })
+@Index('uq_membership_desk_user', ['deskId', 'personId'], { unique: true })
+@Index('ix_membership_user', ['personId'])
+export class MembershipEntity {
+  @PrimaryColumn(idColumn('id')) id!: string;
+  @Column(idColumn('desk_id')) deskId!: string;
+  @Column(idColumn('user_id')) personId!: string;
+  @Column({ type: 'varchar', length: 8 }) role!: Role;
+  @Column(instantColumn('created_at')) createdAt!: Date;
+}

@@ -1,0 +1,90 @@
+import { type DataSource } from 'typeorm';
+import { accountHandlers } from '@/server/account/account-handlers';
+import { AccountService } from '@/server/account/account-service';
+import { LoginThrottle } from '@/server/account/login-throttle';
+import { MeService } from '@/server/account/me-service';
+import { PasswordHasher } from '@/server/account/password-hasher';
+import { SessionStore } from '@/server/account/session-store';
+import { SignInFlow } from '@/server/account/sign-in-flow';
+import { DeskScopes } from '@/server/database/desk-scope';
+import { deskHandlers } from '@/server/desk/desk-handlers';
+import { DeskService } from '@/server/desk/desk-service';
+import { DeskStore } from '@/server/desk/desk-store';
+import { EntryDescriber } from '@/server/entries/describe-entry';
+import { entryHandlers } from '@/server/entries/entry-handlers';
+import { EntryService } from '@/server/entries/entry-service';
+import { FillService } from '@/server/fills/fill-service';
+import { OutcomeService } from '@/server/outcomes/outcome-service';
+import { type HandlersOf } from '@/server/http/handler';
+import { PeopleNames } from '@/server/people/people-names';
+import { PeopleStore } from '@/server/people/people-store';
+import { priceUploadHandlers } from '@/server/prices/price-upload-handlers';
+import { type Clock } from '@/server/runtime/clock';
+import { type Configuration } from '@/server/runtime/configuration';
+import { type Ids } from '@/server/runtime/ids';
+import { ScoreService } from '@/server/scores/score-service';
+import { SealService } from '@/server/seals/seal-service';
+import { TodayService } from '@/server/today/today-service';
+import { underlyingHandlers } from '@/server/underlyings/underlying-handlers';
+import { UnderlyingService } from '@/server/underlyings/underlying-service';
+import { type allEndpoints } from '@/shared/contract/all-endpoints';
+
+export interface Surroundings {
+  readonly configuration: Configuration;
+  readonly dataSource: DataSource;
+  readonly clock: Clock;
+  readonly ids: Ids;
+}
+
+/** Builds every service once and names the handler of every endpoint. */
+export function createServices({ configuration, dataSource, clock, ids }: Surroundings) {
+  const people = new PeopleStore(dataSource);
+  const desks = new DeskStore(dataSource);
+  const deskService = new DeskService(desks);
+  const scopes = new DeskScopes(dataSource);
+  const me = new MeService(scopes, people, deskService, clock);
+  const hasher = new PasswordHasher({ pepper: configuration.PASSWORD_PEPPER, cost: configuration.BCRYPT_COST });
+  const accounts = new AccountService({
+    people,
+    hasher,
+    throttle: new LoginThrottle(dataSource, clock),
+    clock,
+    ids,
+    isSignUpOpen: configuration.OPEN_SIGN_UP === 'yes',
+  });
+  const flow = new SignInFlow(accounts, people);
+
+  const outcomes = new OutcomeService({ clock, ids });
+  const onBarsChanged = outcomes.onBarsChanged.bind(outcomes);
+  const underlyings = new UnderlyingService({ clock });
+
+  const describer = new EntryDescriber(new PeopleNames(desks));
+  const entries = new EntryService({ clock, ids, describer });
+  const seals = new SealService({ clock, ids, outcomes });
+  const fills = new FillService({ clock, ids, outcomes });
+  const scores = new ScoreService(describer);
+  const today = new TodayService({ clock, entries, underlyings, scores });
+
+  const handlers: HandlersOf<typeof allEndpoints> = {
+    ...accountHandlers({ accounts, flow, me, people }),
+    ...deskHandlers(deskService),
+    ...underlyingHandlers({ clock, ids, onBarsChanged }),
+    ...priceUploadHandlers({ clock, ids, onBarsChanged }),
+    ...entryHandlers({ entries, seals, fills }),
+    readToday: ({ scope }) => today.read(scope),
+    readScores: ({ scope }) => scores.read(scope),
+  };
+  return {
+    me,
+    flow,
+    people,
+    hasher,
+    entries,
+    seals,
+    fills,
+    scopes,
+    sessionStore: new SessionStore(dataSource, clock),
+    handlers,
+    close: () => hasher.close(),
+  };
+}
