@@ -1,5 +1,5 @@
-import { normalDensity, normalUpperTail } from '@/journal/distributions/normal-distribution';
 import { DomainError } from '@/journal/errors/domain-error';
+import { outOfTheMoneyPrice, outOfTheMoneyTerms } from '@/journal/pricing/out-of-the-money';
 
 /** A European option on two clocks: variance by sessions, money by calendar years. */
 export interface EuropeanOption {
@@ -71,27 +71,6 @@ function uncheckedPrice({
 }
 
 /**
- * Value of whichever of call and put is out of the money, by present values of spot and strike.
- * By symmetry it depends on their larger and smaller only, so both sides keep their digits.
- */
-export function outOfTheMoneyPrice(presentSpot: number, presentStrike: number, totalDeviation: number): number {
-  if (!(totalDeviation > 0)) return 0;
-  const smaller = Math.min(presentSpot, presentStrike);
-  const larger = Math.max(presentSpot, presentStrike);
-  const moneyness = logRatio(larger, smaller) / totalDeviation;
-  const near = moneyness - totalDeviation / 2;
-  const far = moneyness + totalDeviation / 2;
-  const value = smaller * normalUpperTail(near) - larger * normalUpperTail(far);
-  return value > 0 ? value : 0;
-}
-
-/** ln(larger / smaller), with all digits where the two are close. */
-function logRatio(larger: number, smaller: number): number {
-  const excess = (larger - smaller) / smaller;
-  return excess < 0.5 ? Math.log1p(excess) : Math.log(larger / smaller);
-}
-
-/**
  * Price, five Greeks and risk-neutral odds of a European option.
  * @param option see {@link EuropeanOption}.
  * @param yearsPerNextSession calendar years that pass over the next session, for theta; 1/365 by default.
@@ -106,48 +85,33 @@ export function europeanOptionValue(
   checkOption(option);
   const { type, spotPrice, strikePrice, dailyVolatility, sessions, years, ratePerYear, dividendYield } = option;
   const carry = Math.exp(-dividendYield * years);
-  const discount = Math.exp(-ratePerYear * years);
   const presentSpot = spotPrice * carry;
-  const presentStrike = strikePrice * discount;
+  const presentStrike = strikePrice * Math.exp(-ratePerYear * years);
   const rootSessions = Math.sqrt(sessions);
   const totalDeviation = dailyVolatility * rootSessions;
-  const sign = type === 'call' ? 1 : -1;
+  const terms = outOfTheMoneyTerms(presentSpot, presentStrike, totalDeviation);
 
-  const logMoneyness =
-    presentSpot > presentStrike ? logRatio(presentSpot, presentStrike) : -logRatio(presentStrike, presentSpot);
-  const d2 = totalDeviation > 0 ? logMoneyness / totalDeviation - totalDeviation / 2 : limitOf(logMoneyness);
-  const d1 = totalDeviation > 0 ? d2 + totalDeviation : d2;
-  const oddsInTheMoney = normalUpperTail(-sign * d2);
-  const hedge = normalUpperTail(-sign * d1);
+  const sign = type === 'call' ? 1 : -1;
   const intrinsic = sign * (presentSpot - presentStrike);
-  const direct = sign * (presentSpot * hedge - presentStrike * oddsInTheMoney);
-  const price =
-    totalDeviation > 0
-      ? intrinsic > 0
-        ? intrinsic + sign * (presentStrike * normalUpperTail(sign * d2) - presentSpot * normalUpperTail(sign * d1))
-        : direct
-      : Math.max(intrinsic, 0);
-  const density = totalDeviation > 0 ? normalDensity(d1) : 0;
+  const price = intrinsic > 0 ? terms.price + intrinsic : terms.price;
+  // At equal present values the call is the one that the terms take to be out of the money.
+  const isInTheMoney = type === 'call' ? intrinsic > 0 : intrinsic >= 0;
+  const hedge = isInTheMoney ? 1 - terms.spotTail : terms.spotTail;
+  const oddsInTheMoney = isInTheMoney ? 1 - terms.strikeTail : terms.strikeTail;
   const later = uncheckedPrice({
     ...option,
     sessions: Math.max(sessions - 1, 0),
     years: sessions > 1 ? Math.max(years - yearsPerNextSession, 0) : 0,
   });
   return {
-    price: price > 0 ? price : 0,
+    price,
     delta: sign * carry * hedge,
-    gamma: totalDeviation > 0 ? (carry * density) / (spotPrice * totalDeviation) : 0,
-    vegaPerDailyPoint: presentSpot * density * rootSessions * 0.01,
-    thetaPerSession: later - (price > 0 ? price : 0),
+    gamma: totalDeviation > 0 ? terms.spotDensity / (spotPrice * spotPrice * totalDeviation) : 0,
+    vegaPerDailyPoint: terms.spotDensity * rootSessions * 0.01,
+    thetaPerSession: later - price,
     rhoPerPercent: sign * years * presentStrike * oddsInTheMoney * 0.01,
     oddsInTheMoney,
   };
-}
-
-/** Where d1 and d2 go as the variance goes to 0: the side of the forward decides, and at the strike neither. */
-function limitOf(logMoneyness: number): number {
-  if (logMoneyness === 0) return 0;
-  return logMoneyness > 0 ? Infinity : -Infinity;
 }
 
 function checkOption(option: EuropeanOption): void {

@@ -1,6 +1,7 @@
 import { normalDensity } from '@/journal/distributions/normal-distribution';
 import { DomainError } from '@/journal/errors/domain-error';
-import { type EuropeanOption, outOfTheMoneyPrice } from '@/journal/pricing/european-option';
+import { type EuropeanOption } from '@/journal/pricing/european-option';
+import { outOfTheMoneyPrice } from '@/journal/pricing/out-of-the-money';
 
 export type ImpliedQuestion = Omit<EuropeanOption, 'dailyVolatility'> & {
   /** Currency per share; any finite number, so that a quote with no solution can be told apart. */
@@ -60,9 +61,8 @@ function solveTotalDeviation(presentSpot: number, presentStrike: number, timeVal
     const slope = (presentSpot * normalDensity(logMoneyness / x + x / 2)) / value;
     // In log x the log price is concave and nearly straight far out, so the step is taken there.
     const newton = x * Math.exp(-error / (slope * x));
-    const next = newton > low && newton < high ? newton : middle(low, high);
-    if (Math.abs(next - x) <= 2e-16 * x || error === 0) return next;
-    x = next;
+    if (Math.abs(newton - x) <= 2e-16 * x) return newton;
+    x = newton > low && newton < high ? newton : middle(low, high);
   }
   return x;
 }

@@ -1,4 +1,4 @@
-import { outOfTheMoneyPrice } from '@/journal/pricing/european-option';
+import { outOfTheMoneyPrice } from '@/journal/pricing/out-of-the-money';
 
 /** A leg with the volatility it is repriced at. */
 export interface RepricedLeg {
