@@ -6,7 +6,8 @@ const config = getDefaultConfig(__dirname);
 // Metro's default asset list has ttf and otf but not woff2.
 config.resolver.assetExts.push('woff2');
 // The folders below never ship with the web client; watching them only costs time.
-config.resolver.blockList = [/[/\\](var|build|dist|coverage)[/\\].*/];
+const root = __dirname.replace(/[\\^$.*+?()[\]{}|]/g, '\\$&');
+config.resolver.blockList = [new RegExp(`^${root}[/\\\\](var|build|dist|coverage)[/\\\\]`)];
 // zod's main entry pulls in some fifty message locales, about half of its size: keep English only.
 const zodLocales = path.join(__dirname, 'hooks/client/zod-locales.ts');
 config.resolver.resolveRequest = (context, moduleName, platform) => {
