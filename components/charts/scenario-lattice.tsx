@@ -2,7 +2,7 @@ import { type CSSProperties, type KeyboardEvent, useRef, useState } from 'react'
 import { View } from 'react-native';
 import { ChartKey } from '@/components/charts/chart-key';
 import { priceText } from '@/components/charts/axis-number';
-import { rovingCell } from '@/components/charts/roving-index';
+import { rovingCell } from '@/components/charts/roving-cell';
 import { sigmaName } from '@/components/charts/sigma-scale';
 import { translucent } from '@/components/charts/translucent';
 import { formatNumber, formatOdds } from '@/components/ui/number-format';

@@ -1,14 +1,14 @@
 import { scaleLinear, type ScaleLinear } from 'd3-scale';
-import { type KeyboardEvent, useRef } from 'react';
-import { View } from 'react-native';
+import { type ReactNode } from 'react';
+import { Pressable, View } from 'react-native';
 import { Circle, G, Line, Path } from 'react-native-svg';
 import { ChartCanvas } from '@/components/charts/chart-canvas';
 import { ChartText } from '@/components/charts/chart-text';
-import { rovingIndex } from '@/components/charts/roving-index';
 import { formatNumber, formatPercent } from '@/components/ui/number-format';
 import { Txt } from '@/components/ui/text';
 import { radius } from '@/components/ui/theme/metrics';
 import { useColours } from '@/components/ui/theme/use-theme';
+import { useArrowKeys } from '@/components/ui/use-arrow-keys';
 
 export interface LadderRung {
   readonly key: string;
@@ -132,37 +132,32 @@ interface ChoiceProps {
 }
 
 function RungChoice({ rungs, chosenKey, onChoose, label, rungHeight }: ChoiceProps) {
-  const elements = useRef(new Map<string, HTMLDivElement>());
   const chosenAt = rungs.findIndex((rung) => rung.key === chosenKey);
-  const onKeyDown = (at: number) => (event: KeyboardEvent) => {
-    const isPress = event.key === ' ' || event.key === 'Enter';
-    const next = rungs[isPress ? at : (rovingIndex(event.key, at, rungs.length) ?? -1)];
-    if (next === undefined || event.altKey || event.ctrlKey || event.metaKey) return;
-    event.preventDefault();
-    elements.current.get(next.key)?.focus();
-    onChoose(next.key);
-  };
+  const { onKeyDown, itemRef } = useArrowKeys({
+    count: rungs.length,
+    current: Math.max(0, chosenAt),
+    onMove: (index) => {
+      const rung = rungs[index];
+      if (rung !== undefined) onChoose(rung.key);
+    },
+  });
   return (
-    <div role="radiogroup" aria-label={label}>
+    <View role="radiogroup" aria-label={label} {...{ onKeyDown }}>
       {rungs.map((rung, index) => (
-        <div
+        <Pressable
           key={rung.key}
-          ref={(element) => {
-            if (element === null) elements.current.delete(rung.key);
-            else elements.current.set(rung.key, element);
-          }}
+          ref={itemRef(index)}
           role="radio"
           aria-checked={index === chosenAt}
           aria-label={rungWords(rung)}
-          tabIndex={index === Math.max(0, chosenAt) ? 0 : -1}
-          onClick={() => onChoose(rung.key)}
-          onKeyDown={onKeyDown(index)}
-          style={{ cursor: 'pointer', borderRadius: radius.control }}
+          {...{ tabIndex: index === Math.max(0, chosenAt) ? 0 : -1 }}
+          onPress={() => onChoose(rung.key)}
+          style={{ borderRadius: radius.control }}
         >
           <RungWords rung={rung} isChosen={index === chosenAt} height={rungHeight} />
-        </div>
+        </Pressable>
       ))}
-    </div>
+    </View>
   );
 }
 
@@ -205,7 +200,7 @@ function ImpliedWords({ implied, height, isSpoken }: { implied: LadderImplied; h
   );
 }
 
-function Row({ height, ground, children }: { height: number; ground?: string; children: React.ReactNode }) {
+function Row({ height, ground, children }: { height: number; ground?: string; children: ReactNode }) {
   return (
     <View
       style={{

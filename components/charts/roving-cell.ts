@@ -1,22 +1,3 @@
-/** Where an arrow key leads in a row of `count` choices, round the ends; null for other keys. */
-export function rovingIndex(key: string, at: number, count: number): number | null {
-  if (count === 0) return null;
-  switch (key) {
-    case 'ArrowDown':
-    case 'ArrowRight':
-      return (at + 1) % count;
-    case 'ArrowUp':
-    case 'ArrowLeft':
-      return (at - 1 + count) % count;
-    case 'Home':
-      return 0;
-    case 'End':
-      return count - 1;
-    default:
-      return null;
-  }
-}
-
 interface Cell {
   readonly row: number;
   readonly column: number;
