@@ -1,0 +1,117 @@
+import fc from 'fast-check';
+import { europeanOptionPrice, europeanOptionValue } from '@/journal/pricing/european-option';
+import { type ImpliedQuestion, impliedDailyVolatility } from '@/journal/pricing/implied-daily-volatility';
+import { randomOption } from '@/tests/journal/pricing/random-option';
+
+const quote: ImpliedQuestion = {
+  type: 'call',
+  price: 1.2,
+  spotPrice: 100,
+  strikePrice: 102,
+  sessions: 10,
+  years: 14 / 365,
+  ratePerYear: 0.04,
+  dividendYield: 0,
+};
+const foundFor = (question: ImpliedQuestion): number => {
+  const answer = impliedDailyVolatility(question);
+  if (answer.kind !== 'found') throw new Error(`none: ${answer.bound}`);
+  return answer.dailyVolatility;
+};
+
+describe('implied daily volatility', () => {
+  it('reprices the quote it was found from', () => {
+    const dailyVolatility = foundFor(quote);
+    expect(europeanOptionPrice({ ...quote, dailyVolatility })).toBeCloseTo(quote.price, 14);
+  });
+
+  it('comes back to the volatility a price was made with, as near as the price can tell', () => {
+    fc.assert(
+      fc.property(randomOption, (option) => {
+        const { price, vegaPerDailyPoint } = europeanOptionValue(option);
+        fc.pre(price > 0);
+        const answer = impliedDailyVolatility({ ...option, price });
+        const roundingOfPrice = 4 * 2.3e-16 * Math.max(option.spotPrice, option.strikePrice);
+        const tellsApart = (roundingOfPrice / vegaPerDailyPoint) * 0.01;
+        if (answer.kind !== 'found') {
+          // Deep in the money all time value can be lost to rounding; then, and only then, there is none.
+          expect(tellsApart).toBeGreaterThan(0.1 * option.dailyVolatility);
+          return;
+        }
+        const error = Math.abs(answer.dailyVolatility - option.dailyVolatility);
+        expect(error).toBeLessThanOrEqual(tellsApart + 1e-14 * option.dailyVolatility);
+      }),
+      { numRuns: 1000 },
+    );
+  });
+
+  it('rises with the price', () => {
+    fc.assert(
+      fc.property(
+        fc.double({ min: 1e-12, max: 90, noNaN: true }),
+        fc.double({ min: 1.001, max: 1.1, noNaN: true }),
+        (price, factor) => {
+          expect(foundFor({ ...quote, price: price * factor })).toBeGreaterThan(foundFor({ ...quote, price }));
+        },
+      ),
+    );
+  });
+
+  it('is the same for call and put by parity', () => {
+    const put = quote.price - quote.spotPrice + quote.strikePrice * Math.exp(-quote.ratePerYear * quote.years);
+    expect(foundFor({ ...quote, type: 'put', price: put })).toBeCloseTo(foundFor(quote), 14);
+  });
+
+  it.each([1e-300, 1e-200, 1e-100, 1e-30])('finds a volatility for a time value of %p', (price) => {
+    const dailyVolatility = foundFor({ ...quote, price });
+    // So far out one rounding of the spot moves the price by up to 70,000 roundings.
+    expect(Math.abs(europeanOptionPrice({ ...quote, dailyVolatility }) / price - 1)).toBeLessThanOrEqual(1.6e-11);
+  });
+
+  it('finds a volatility a hair under the most a call can cost', () => {
+    const dailyVolatility = foundFor({ ...quote, price: 99.999999 });
+    expect(europeanOptionPrice({ ...quote, dailyVolatility })).toBeCloseTo(99.999999, 12);
+  });
+
+  it.each([
+    { why: 'the price is under its intrinsic value', change: { spotPrice: 105, price: 3 }, bound: 'below-intrinsic' },
+    {
+      why: 'the price is exactly intrinsic',
+      change: { strikePrice: 90, ratePerYear: 0, price: 10 },
+      bound: 'below-intrinsic',
+    },
+    { why: 'a call costs as much as the stock', change: { price: 100 }, bound: 'above-maximum' },
+    { why: 'the price is 0', change: { price: 0 }, bound: 'below-intrinsic' },
+    { why: 'the price is negative', change: { price: -0.01 }, bound: 'below-intrinsic' },
+    { why: 'no session is left', change: { sessions: 0 }, bound: 'no-time-left' },
+  ])('says $bound when $why', ({ change, bound }) => {
+    expect(impliedDailyVolatility({ ...quote, ...change })).toEqual(expect.objectContaining({ kind: 'none', bound }));
+  });
+
+  it('states the broken bound in currency', () => {
+    expect(impliedDailyVolatility({ ...quote, price: 101 })).toEqual({
+      kind: 'none',
+      bound: 'above-maximum',
+      limit: 100,
+    });
+    expect(impliedDailyVolatility({ ...quote, ratePerYear: 0, strikePrice: 90, price: 9 })).toEqual({
+      kind: 'none',
+      bound: 'below-intrinsic',
+      limit: 10,
+    });
+  });
+
+  it.each([
+    ['price', NaN],
+    ['price', Infinity],
+    ['spotPrice', 0],
+    ['strikePrice', NaN],
+    ['sessions', -1],
+    ['years', NaN],
+    ['ratePerYear', Infinity],
+  ] as const)('throws option-input-invalid for a %s of %p', (field, value) => {
+    expect(() => impliedDailyVolatility({ ...quote, [field]: value })).toThrow(
+      expect.objectContaining({ code: 'option-input-invalid' }),
+    );
+  });
+});
