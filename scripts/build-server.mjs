@@ -1,5 +1,5 @@
 // Bundles the server and its commands; packages stay outside. `node scripts/build-server.mjs`
-import { readdirSync } from 'node:fs';
+import { mkdirSync, readdirSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { build } from 'esbuild';
 import { inRoot } from './places.mjs';
@@ -19,6 +19,9 @@ function entryPoints() {
 }
 
 export async function buildServer() {
+  mkdirSync(inRoot('build'), { recursive: true });
+  // The bundle is made of ES modules, whatever the packages around it are.
+  writeFileSync(inRoot('build/package.json'), '{ "type": "module" }\n');
   await build({
     absWorkingDir: inRoot(),
     entryPoints: entryPoints(),

@@ -45,15 +45,15 @@ export function Rail({ person, badges }: Props) {
               <Pressable
                 role="link"
                 {...(isCurrent ? { 'aria-current': 'page' } : {})}
-                style={({ pressed }) => ({
+                style={{
                   width: 80,
                   height: sizes.railItem,
                   alignItems: 'center',
                   justifyContent: 'center',
                   gap: 4,
                   borderRadius: radius.control,
-                  backgroundColor: isCurrent ? colours.brambleWash : pressed ? colours.well : 'transparent',
-                })}
+                  backgroundColor: isCurrent ? colours.brambleWash : 'transparent',
+                }}
               >
                 <View>
                   <Icon name={icon} colour={isCurrent ? 'bramble' : 'inkSoft'} />

@@ -1,6 +1,6 @@
 import { Link, type Href } from 'expo-router';
-import { useId, type Ref } from 'react';
-import { Pressable, type View, type PressableStateCallbackType, type TextStyle, type ViewStyle } from 'react-native';
+import { useId, useState, type Ref } from 'react';
+import { Pressable, type DimensionValue, type View, type TextStyle, type ViewStyle } from 'react-native';
 import { HiddenText } from '@/components/ui/hidden-text';
 import { Icon } from '@/components/ui/icon';
 import { type IconName } from '@/components/ui/icon-shapes';
@@ -68,10 +68,13 @@ export function Button({
   const hintId = useId();
   const isOff = disabled || busy;
   const ink: ColourName = disabled ? 'inkSoft' : (tone ?? inks[kind]);
-  const style = ({ pressed }: PressableStateCallbackType): ViewStyle => ({
+  // As state, not as a style function: a link hands its style on as a plain object.
+  const [isPressed, setIsPressed] = useState(false);
+  const style: ViewStyle = {
     ...shape({ kind, size, fullWidth, iconOnly }),
-    ...ground(colours, { kind, disabled, isPressed: pressed || busy }),
-  });
+    ...ground(colours, { kind, disabled, isPressed: isPressed || busy }),
+  };
+  const press = { onPressIn: () => setIsPressed(true), onPressOut: () => setIsPressed(false) };
   const content = (
     <>
       {icon === undefined ? null : <Icon name={icon} size={kind === 'text' && !iconOnly ? 18 : 20} colour={ink} />}
@@ -98,7 +101,7 @@ export function Button({
   if (href !== undefined && !isOff) {
     return (
       <Link href={href} asChild>
-        <Pressable {...described} ref={ref} role="link" style={style}>
+        <Pressable {...described} {...press} ref={ref} role="link" style={style}>
           {content}
         </Pressable>
       </Link>
@@ -107,6 +110,7 @@ export function Button({
   return (
     <Pressable
       {...described}
+      {...press}
       ref={ref}
       role="button"
       disabled={isOff}
@@ -120,6 +124,10 @@ export function Button({
   );
 }
 
+// As wide as its words in a column and in a row alike; React Native's types do not know this word of the web.
+const fitContentWord: string = 'fit-content';
+const fitContent = fitContentWord as DimensionValue;
+
 type Shape = Required<Pick<ButtonProps, 'kind' | 'size' | 'fullWidth' | 'iconOnly'>>;
 
 function shape({ kind, size, fullWidth, iconOnly }: Shape): ViewStyle {
@@ -131,7 +139,7 @@ function shape({ kind, size, fullWidth, iconOnly }: Shape): ViewStyle {
     gap: 8,
     minHeight: height,
     borderRadius: radius.control,
-    alignSelf: fullWidth ? 'stretch' : 'flex-start',
+    width: fullWidth ? '100%' : fitContent,
   };
   if (iconOnly) return { ...row, width: height };
   // A text action is as tall as its line to the eye and 44 to the finger.

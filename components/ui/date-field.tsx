@@ -1,6 +1,7 @@
 import { useId } from 'react';
 import { fieldBox } from '@/components/ui/field-box';
 import { FieldShell, fieldAria, type FieldShellProps } from '@/components/ui/field-shell';
+import { formatDate } from '@/components/ui/number-format';
 import { pageText } from '@/components/ui/theme/type-face';
 import { useColours } from '@/components/ui/theme/use-theme';
 
@@ -30,7 +31,13 @@ export function DateField({
 }: Props) {
   const colours = useColours();
   const id = useId();
-  const shell = { label, hideLabel, hint, error };
+  // The browser shows the date in the order of its own language; the words leave no doubt.
+  const shell = {
+    label,
+    hideLabel,
+    error,
+    hint: hint ?? (value === '' || hideLabel ? undefined : formatDate(value, 'full')),
+  };
   return (
     <FieldShell {...shell} controlId={id}>
       <input

@@ -17,7 +17,7 @@ interface Props {
 export function SignedAmount({ value, currency, size = 'body', showCurrency = size === 'figure', places }: Props) {
   if (value === null || !Number.isFinite(Number(value))) {
     return (
-      <Txt size={size} colour="inkSoft">
+      <Txt size={size} colour="inkSoft" align="right">
         <span aria-hidden>–</span>
         <HiddenText>no amount yet</HiddenText>
       </Txt>

@@ -28,7 +28,12 @@ export function Tabs<K extends string>({ label, tabs, value, onChange, children 
   });
   return (
     <View style={{ gap: 16 }}>
-      <ScrollView horizontal showsHorizontalScrollIndicator={false} style={{ flexGrow: 0 }}>
+      <ScrollView
+        horizontal
+        showsHorizontalScrollIndicator={false}
+        style={{ flexGrow: 0 }}
+        contentContainerStyle={{ flexGrow: 1 }}
+      >
         <View
           role="tablist"
           aria-label={label}

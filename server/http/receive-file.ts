@@ -37,7 +37,9 @@ export const receiveFile: RequestHandler = (request, response, next) => {
 };
 
 async function removeFile(request: Request): Promise<void> {
-  if (request.file !== undefined) await rm(request.file.path, { force: true });
+  // When the request was refused half way, what is there of the file has no path: it was removed already.
+  const path: string | undefined = request.file?.path;
+  if (path !== undefined) await rm(path, { force: true });
 }
 
 function asFailure(error: unknown): unknown {

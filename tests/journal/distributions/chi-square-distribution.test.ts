@@ -3,6 +3,8 @@ import reference from '@/tests/reference/data/sigma_interval.json';
 import { casesOf, numberOf } from '@/tests/reference/reference-file';
 import { chiSquareCumulative, chiSquareQuantile } from '@/journal/distributions/chi-square-distribution';
 
+fc.configureGlobal({ seed: 20261201 });
+
 const relativeError = (actual: number, expected: number) => Math.abs(actual / expected - 1);
 
 describe('chi-square distribution', () => {

@@ -9,6 +9,8 @@ import {
   scaledUpperTail,
 } from '@/journal/distributions/normal-distribution';
 
+fc.configureGlobal({ seed: 20261201 });
+
 const relativeError = (actual: number, expected: number) => Math.abs(actual / expected - 1);
 /** Four roundings of a double: what a product of two exponentials and a fraction may lose. */
 const fewRoundings = 9e-16;

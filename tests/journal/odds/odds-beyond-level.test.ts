@@ -4,6 +4,8 @@ import { oddsBeyondLevel } from '@/journal/odds/odds-beyond-level';
 import { europeanOptionValue } from '@/journal/pricing/european-option';
 import { levelQuestion, tenSessions } from '@/tests/journal/odds/level-questions';
 
+fc.configureGlobal({ seed: 20261201 });
+
 const totalDeviation = Math.sqrt(tenSessions.totalVariance);
 
 describe('odds beyond a level', () => {

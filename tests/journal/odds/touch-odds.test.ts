@@ -4,6 +4,8 @@ import { oddsBeyondLevel } from '@/journal/odds/odds-beyond-level';
 import { touchOdds } from '@/journal/odds/touch-odds';
 import { levelQuestion, tenSessions } from '@/tests/journal/odds/level-questions';
 
+fc.configureGlobal({ seed: 20261201 });
+
 const plan = { spotPrice: 100, level: 102, totalDeviation: Math.sqrt(tenSessions.totalVariance), logDrift: 0 };
 
 describe('touch odds', () => {

@@ -1,4 +1,4 @@
-import { jStat } from 'jstat';
+import jstat from 'jstat';
 import { varianceRatioQuantile } from '@/journal/outcome/variance-ratio-quantile';
 
 /** Incomplete beta function inverted in mpmath 1.2 at 40 digits. */
@@ -27,7 +27,7 @@ describe('varianceRatioQuantile', () => {
     'at %d with %d and %d degrees of freedom agrees with jstat',
     (probability, numeratorDegrees, denominatorDegrees) => {
       const actual = varianceRatioQuantile({ probability, numeratorDegrees, denominatorDegrees });
-      const other = jStat.centralF.inv(probability, numeratorDegrees, denominatorDegrees);
+      const other = jstat.jStat.centralF.inv(probability, numeratorDegrees, denominatorDegrees);
       expect(Math.abs(actual / other - 1)).toBeLessThanOrEqual(1e-7);
     },
   );

@@ -2,6 +2,8 @@ import fc from 'fast-check';
 import { type EuropeanOption, europeanOptionPrice, europeanOptionValue } from '@/journal/pricing/european-option';
 import { randomOption } from '@/tests/journal/pricing/random-option';
 
+fc.configureGlobal({ seed: 20261201 });
+
 const plannedCall: EuropeanOption = {
   type: 'call',
   spotPrice: 100,

@@ -3,6 +3,8 @@ import { europeanOptionPrice, europeanOptionValue } from '@/journal/pricing/euro
 import { type ImpliedQuestion, impliedDailyVolatility } from '@/journal/pricing/implied-daily-volatility';
 import { randomOption } from '@/tests/journal/pricing/random-option';
 
+fc.configureGlobal({ seed: 20261201 });
+
 const quote: ImpliedQuestion = {
   type: 'call',
   price: 1.2,

@@ -1,0 +1,10 @@
+import { Slot } from 'expo-router';
+import { SignedIn } from '@/components/frame/signed-in';
+
+export default function DeskLayout() {
+  return (
+    <SignedIn>
+      <Slot />
+    </SignedIn>
+  );
+}

@@ -1,0 +1,5 @@
+import { InvitationScreen } from '@/components/account/invitation-screen';
+
+export default function InvitationRoute() {
+  return <InvitationScreen />;
+}

@@ -1,0 +1,5 @@
+import { SignUpScreen } from '@/components/account/sign-up-screen';
+
+export default function SignUpRoute() {
+  return <SignUpScreen />;
+}

@@ -1,0 +1,66 @@
+import { useRouter } from 'expo-router';
+import { View } from 'react-native';
+import { EntryHead } from '@/components/entry/entry-head';
+import { ExpectedBesideRealised } from '@/components/entry/expected-beside-realised';
+import { FillsSection } from '@/components/entry/fills-section';
+import { LandingSection } from '@/components/entry/landing-section';
+import { LessonSection } from '@/components/entry/lesson-section';
+import { OddsOutcomeSection } from '@/components/entry/odds-outcome-section';
+import { SealedPlanSection } from '@/components/entry/sealed-plan-section';
+import { ScreenFrame } from '@/components/frame/screen-frame';
+import { CautionLine } from '@/components/ui/caution-line';
+import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
+import { space } from '@/components/ui/theme/metrics';
+import { useLayout } from '@/components/ui/use-layout';
+import { useEntry } from '@/hooks/entries/use-entries';
+
+/** One entry after its seal: where it landed, the odds and what happened, fills, lesson, and the sealed plan. */
+export function EntryScreen({ entryId }: { entryId: string }) {
+  const router = useRouter();
+  const { kind: layout } = useLayout();
+  const { data: entry, error, isPending, refetch } = useEntry(entryId);
+  if (isPending) return <LoadingState label="Loading entry" />;
+  if (error) return <ErrorState error={error} onRetry={refetch} />;
+
+  const back = layout === 'wide' ? undefined : { label: 'Journal', onPress: () => router.navigate('/journal') };
+  const title = `${entry.row.underlying.symbol} ${entry.row.structureName}`;
+  const { sealed } = entry;
+  if (sealed === null) {
+    const open = () => router.push({ pathname: '/plan/[entryId]', params: { entryId } });
+    return (
+      <ScreenFrame title={title} back={back}>
+        <EmptyState
+          title="Still a draft"
+          text="Nothing is sealed yet."
+          action={entry.isOwn ? { label: 'Go on planning', onPress: open } : undefined}
+        />
+      </ScreenFrame>
+    );
+  }
+  const sealedEntry = { ...entry, sealed };
+  return (
+    <ScreenFrame title={title} back={back} head={<EntryHead entry={sealedEntry} />}>
+      <View style={{ gap: space.cardGap }}>
+        <LandingSection entry={sealedEntry} />
+        <View
+          style={
+            layout === 'wide'
+              ? { flexDirection: 'row', gap: space.columnGap, alignItems: 'flex-start' }
+              : { gap: space.cardGap }
+          }
+        >
+          <View style={layout === 'wide' ? { flex: 1, minWidth: 0 } : undefined}>
+            <OddsOutcomeSection entry={sealedEntry} />
+          </View>
+          <View style={layout === 'wide' ? { flex: 1, minWidth: 0 } : undefined}>
+            <ExpectedBesideRealised entry={sealedEntry} />
+          </View>
+        </View>
+        <FillsSection entry={sealedEntry} />
+        <LessonSection entry={sealedEntry} />
+        <SealedPlanSection entry={sealedEntry} />
+        <CautionLine />
+      </View>
+    </ScreenFrame>
+  );
+}

@@ -1,0 +1,58 @@
+import { View } from 'react-native';
+import { OddsBand, OddsBandKey } from '@/components/charts/odds-band';
+import { type SealedEntry } from '@/components/entry/sealed-entry';
+import { Card } from '@/components/ui/card';
+import { formatDate } from '@/components/ui/number-format';
+import { Rule } from '@/components/ui/rule';
+import { Txt } from '@/components/ui/text';
+import { oddsStatement } from '@/shared/entries/odds-statement';
+
+/** Each stated probability with its outcome and Brier score beside the market's odds; pending ones say for what they wait. */
+export function OddsOutcomeSection({ entry }: { entry: SealedEntry }) {
+  const { sealed, outcome } = entry;
+  const resolved = new Map(outcome?.odds.map((item) => [item.odds.key, item]) ?? []);
+  const scores = [...resolved.values()].flatMap(({ brierScore }) => (brierScore === null ? [] : [brierScore]));
+  const mean = scores.length === 0 ? null : scores.reduce((sum, score) => sum + score, 0) / scores.length;
+  return (
+    <Card
+      title="Odds and what happened"
+      subtitle={
+        mean === null
+          ? 'None is resolved yet'
+          : `${scores.length} of ${sealed.forecast.odds.length} resolved, mean Brier ${mean.toFixed(2)}`
+      }
+    >
+      <View style={{ gap: 12 }}>
+        {sealed.forecast.odds.map((odds, index) => {
+          const result = resolved.get(odds.key);
+          const happened = result?.happened ?? null;
+          return (
+            <View key={odds.key} style={{ gap: 8 }}>
+              {index > 0 ? <Rule /> : null}
+              <OddsBand
+                label={oddsStatement(odds, sealed.input)}
+                low={odds.probability.low}
+                estimate={odds.probability.base}
+                high={odds.probability.high}
+                marketImplied={odds.marketImplied ?? undefined}
+                outcome={happened === null ? undefined : happened ? 1 : 0}
+                due={happened === null ? formatDate(odds.dueSessionDate, 'short') : undefined}
+              />
+              <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 12, flexWrap: 'wrap' }}>
+                <Txt size="note" colour="inkSoft">
+                  {`low to high volatility${result?.monitoredBy === 'closes' ? '; judged by closes, the bars have no highs and lows' : ''}`}
+                </Txt>
+                <Txt size="note" colour="inkSoft">
+                  {result?.brierScore != null
+                    ? `Brier ${result.brierScore.toFixed(result.brierScore < 0.1 ? 3 : 2)}${result.marketBrierScore === null ? '' : `, market ${result.marketBrierScore.toFixed(result.marketBrierScore < 0.1 ? 3 : 2)}`}`
+                    : (result?.waitsFor ?? `due ${formatDate(odds.dueSessionDate, 'short')}`)}
+                </Txt>
+              </View>
+            </View>
+          );
+        })}
+        <OddsBandKey shows={['estimate', 'interval', 'market', 'outcome']} />
+      </View>
+    </Card>
+  );
+}
