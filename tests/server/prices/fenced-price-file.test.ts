@@ -1,6 +1,8 @@
 import { readInThread, readPriceFileFenced, fenceLimits } from '@/server/prices/fenced-price-file';
 import { day, makeWorkbook } from '@/tests/server/prices/make-workbook';
 
+jest.setTimeout(60_000); // threads start slowly on a busy machine
+
 const request = { fileName: 'prices.xlsx', wanted: null, shown: null, now: '2026-12-09T22:00:00.000Z' };
 const rows = (count: number): Promise<Buffer> =>
   makeWorkbook({

@@ -1,3 +1,4 @@
+import { type Worksheet } from 'exceljs';
 import { readPriceFile } from '@/server/prices/reading/read-price-file';
 import { type SettledReading } from '@/server/prices/reading/interpret-table';
 import { type Reading } from '@/shared/prices/price-upload';
@@ -98,7 +99,7 @@ describe('a workbook', () => {
   });
 
   it('leaves hidden sheets out and asks which of several price sheets to read', async () => {
-    const fill = (close: number) => (sheet: import('exceljs').Worksheet) =>
+    const fill = (close: number) => (sheet: Worksheet) =>
       void sheet.addRows([
         ['Date', 'Close'],
         [day('2026-01-05'), close],
