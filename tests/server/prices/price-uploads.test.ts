@@ -25,7 +25,10 @@ let underlyingId: string;
 beforeAll(async () => {
   app = await startTestApp();
 });
-afterAll(() => app.stop());
+afterAll(async () => {
+  await app.stop();
+  expect(app.guard.offences).toEqual([]); // no statement on a desk's table went without the desk
+});
 beforeEach(async () => {
   app.clock.set(now);
   trader = await app.person({ role: 'trader' });
@@ -292,6 +295,13 @@ describe('a file that cannot be read', () => {
 });
 
 describe('who may upload', () => {
+  it('is nobody without a session', async () => {
+    await app.anonymous
+      .post(`/underlyings/${underlyingId}/price-uploads`)
+      .attach('file', Buffer.from(twoBars), 'a.csv')
+      .expect(401);
+  });
+
   it('is nobody outside the desk, and nobody else sees the upload', async () => {
     const shown = await preview(twoBars);
     const stranger = await app.person({ role: 'trader' });

@@ -19,7 +19,10 @@ let trader: TestPerson;
 beforeAll(async () => {
   app = await startTestApp();
 });
-afterAll(() => app.stop());
+afterAll(async () => {
+  await app.stop();
+  expect(app.guard.offences).toEqual([]); // no statement on a desk's table went without the desk
+});
 beforeEach(async () => {
   app.clock.set(now);
   trader = await app.person({ role: 'trader' });
