@@ -149,6 +149,11 @@ function Plot({
           />
         );
       })}
+      {known.length > 0 ? null : (
+        <ChartText x={LEFT + side / 2} y={TOP + side * 0.25} anchor="middle" size={14}>
+          No odds resolved yet
+        </ChartText>
+      )}
       {callout === undefined ? null : (
         <Callout {...callout} scales={scales} side={side} count={countAt(known, callout)} />
       )}

@@ -11,6 +11,8 @@ interface Props {
   readonly weight?: TextWeight;
   readonly colour?: ColourName;
   readonly size?: number;
+  /** Clears the lines behind the words, in the colour of the ground. */
+  readonly halo?: ColourName;
   readonly children: string;
 }
 
@@ -22,13 +24,22 @@ export function ChartText({
   weight = 'regular',
   colour = 'inkSoft',
   size = 12,
+  halo,
   children,
 }: Props) {
   const colours = useColours();
+  const place = { x, y, textAnchor: anchor, ...sansFace(weight), fontSize: size };
   return (
-    <SvgText x={x} y={y} textAnchor={anchor} {...sansFace(weight)} fontSize={size} fill={colours[colour]}>
-      {children}
-    </SvgText>
+    <>
+      {halo === undefined ? null : (
+        <SvgText {...place} fill="none" stroke={colours[halo]} strokeWidth={4} strokeLinejoin="round" aria-hidden>
+          {children}
+        </SvgText>
+      )}
+      <SvgText {...place} fill={colours[colour]}>
+        {children}
+      </SvgText>
+    </>
   );
 }
 

@@ -102,6 +102,7 @@ function Picture({ width, bars, highlightLast = 0, events }: ClosesPicture & { w
             anchor="end"
             weight="medium"
             colour="bramble"
+            halo="sheet"
           >
             {words}
           </ChartText>

@@ -68,13 +68,13 @@ function Value({ odds, valueText, hasInterval }: { odds: StatedOdds; valueText?:
   const { outcome, due } = odds;
   if (valueText !== undefined) {
     return (
-      <Txt size="row" weight="semibold" align="right">
+      <Txt size="row" weight="semibold" align="right" style={{ flexShrink: 0 }}>
         {valueText}
       </Txt>
     );
   }
   return (
-    <Txt size="row" colour="inkSoft" align="right">
+    <Txt size="row" colour="inkSoft" align="right" style={{ flexShrink: 0 }}>
       <Txt size="body" weight="semibold">
         {oddsText(odds.estimate)}
       </Txt>

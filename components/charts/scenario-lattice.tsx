@@ -84,12 +84,17 @@ export function ScenarioLattice(props: Props) {
     setAt(next);
     cells.current.get(`${next.row}-${next.column}`)?.focus();
   };
-  const looks = { cellHeight, isTight: longest > 5, least: longest * 7.2 + 8, colours };
+  const looks = { cellHeight, isTight: longest > 5, colours };
 
   return (
     <View style={{ gap: 8 }}>
       <div style={{ overflowX: 'auto', padding: 4, margin: -4 }}>
-        <table role="grid" aria-label={`${caption}, ${unit}`} onKeyDown={onKeyDown} style={tableStyle}>
+        <table
+          role="grid"
+          aria-label={`${caption}, ${unit}`}
+          onKeyDown={onKeyDown}
+          style={{ ...tableStyle, minWidth: LABEL + columns.length * (longest * 7.2 + 8) }}
+        >
           <thead>
             <tr>
               <td style={{ width: LABEL, padding: 0 }} />
@@ -160,11 +165,22 @@ export function ScenarioLattice(props: Props) {
   );
 }
 
+// Stays in sight while wide cells scroll sideways.
+const rowHeadStyle: CSSProperties = {
+  position: 'sticky',
+  left: 0,
+  zIndex: 3,
+  width: LABEL,
+  padding: 0,
+  textAlign: 'left',
+  whiteSpace: 'nowrap',
+};
+
 const tableStyle: CSSProperties = { width: '100%', borderCollapse: 'separate', borderSpacing: 1, tableLayout: 'fixed' };
 
 function RowHead({ row, colours }: { row: LatticeRow; colours: Colours }) {
   return (
-    <th scope="row" style={{ width: LABEL, padding: 0, textAlign: 'left', whiteSpace: 'nowrap', color: colours.ink }}>
+    <th scope="row" style={{ ...rowHeadStyle, color: colours.ink, backgroundColor: colours.sheet }}>
       <span style={{ ...pageText('row', 'medium'), lineHeight: '17px', display: 'block' }}>{sigmaName(row.sigma)}</span>
       <span style={{ ...pageText('note'), lineHeight: '14px', display: 'block', color: colours.inkSoft }}>
         {priceText(row.price)}
@@ -208,7 +224,6 @@ interface CellLook {
   readonly cellHeight: number;
   /** Long numbers are set smaller. */
   readonly isTight: boolean;
-  readonly least: number;
   readonly isCurrent: boolean;
   readonly isFocused: boolean;
   readonly colours: Colours;
@@ -217,7 +232,7 @@ interface CellLook {
 function cellStyle(
   { profit, likelihood }: LatticeCell,
   { largestLoss, largestGain }: Pick<Props, 'largestLoss' | 'largestGain'>,
-  { cellHeight, isTight, least, isCurrent, isFocused, colours }: CellLook,
+  { cellHeight, isTight, isCurrent, isFocused, colours }: CellLook,
 ): CSSProperties {
   const hue = profit < 0 ? colours.rust : colours.tide;
   return {
@@ -225,7 +240,6 @@ function cellStyle(
     position: 'relative',
     zIndex: isFocused ? 2 : isCurrent ? 1 : 0,
     height: cellHeight,
-    minWidth: least,
     padding: 0,
     paddingLeft: isCurrent ? 0 : likelihoodEdge(likelihood) * 0.8,
     textAlign: 'center',
