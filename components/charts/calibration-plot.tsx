@@ -8,7 +8,7 @@ import { ChartText, textWidth } from '@/components/charts/chart-text';
 import { formatOdds, formatPercent } from '@/components/ui/number-format';
 import { useColours } from '@/components/ui/theme/use-theme';
 
-export interface CalibrationBin {
+interface CalibrationBin {
   /** Fractions in [0, 1]: mean stated odds, and the share that came true. */
   readonly forecast: number;
   readonly observed: number;
@@ -18,7 +18,7 @@ export interface CalibrationBin {
   readonly high: number;
 }
 
-export interface CalibrationPoint {
+interface CalibrationPoint {
   readonly forecast: number;
   readonly observed: number;
 }

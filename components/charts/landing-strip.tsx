@@ -8,7 +8,7 @@ import { isOnStrip, pastEnd, sigmaScale } from '@/components/charts/sigma-scale'
 import { formatSigma } from '@/components/ui/number-format';
 import { useColours } from '@/components/ui/theme/use-theme';
 
-export interface SigmaMarks {
+interface SigmaMarks {
   readonly strikes: readonly number[];
   readonly target?: number;
   readonly stop?: number;

@@ -32,7 +32,7 @@ export function PlaceInYear({ width, ...place }: Props) {
 }
 
 /** From a volatility to pixels; values beyond the year's ends stay at the ends. */
-export function yearScale({ lowest, highest }: Pick<YearPlace, 'lowest' | 'highest'>, width: number) {
+function yearScale({ lowest, highest }: Pick<YearPlace, 'lowest' | 'highest'>, width: number) {
   const room = [INSET, Math.max(INSET, width - INSET)];
   return scaleLinear(lowest < highest ? [lowest, highest] : [lowest - 1, lowest + 1], room).clamp(true);
 }

@@ -9,13 +9,13 @@ import { type ColourName } from '@/components/ui/theme/colours';
 import { useColours } from '@/components/ui/theme/use-theme';
 
 /** A single profit that carries probability of its own. */
-export interface ProfitLump {
+interface ProfitLump {
   readonly profit: number;
   readonly probability: number;
 }
 
 /** The continuous part between two profits. */
-export interface ProfitSpan {
+interface ProfitSpan {
   readonly from: number;
   readonly to: number;
   readonly probability: number;

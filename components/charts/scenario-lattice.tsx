@@ -12,13 +12,13 @@ import { pageText } from '@/components/ui/theme/type-face';
 import { useColours } from '@/components/ui/theme/use-theme';
 import { useLayout } from '@/components/ui/use-layout';
 
-export interface LatticeRow {
+interface LatticeRow {
   /** The underlying's move in deviations of the hold, and its price there. */
   readonly sigma: number;
   readonly price: number;
 }
 
-export interface LatticeColumn {
+interface LatticeColumn {
   readonly label: string;
 }
 

@@ -1,7 +1,7 @@
 import { scaleLinear } from 'd3-scale';
 
 /** The strip shows the forecast from −3σ to +3σ. */
-export const SIGMA_RANGE = 3;
+const SIGMA_RANGE = 3;
 
 /** From sigmas to pixels: −3σ stands `inset` from the left, +3σ `inset` from the right. */
 export function sigmaScale(width: number, inset: number) {

@@ -47,7 +47,7 @@ export function ScreenFrame({ hideBottomBar = false, scrolls = true, children, .
     <Main>
       <ScrollView style={{ flex: 1 }} stickyHeaderIndices={isWide ? undefined : [0]}>
         <TopBar {...top} />
-        <View style={{ paddingHorizontal: gutter, paddingBottom: isWide ? 40 : 24 }}>
+        <View style={{ paddingHorizontal: gutter, paddingTop: 4, paddingBottom: isWide ? 40 : 24 }}>
           {head}
           {children}
         </View>

@@ -1,13 +1,12 @@
-import { Link } from 'expo-router';
-import { Pressable, View } from 'react-native';
+import { View } from 'react-native';
 import { LandingStrip } from '@/components/charts/landing-strip';
 import { Chip } from '@/components/ui/chip';
 import { formatDate, formatSigma } from '@/components/ui/number-format';
 import { SignedAmount } from '@/components/ui/signed-amount';
 import { StateBerry } from '@/components/ui/state-berry';
+import { LinkRow } from '@/components/ui/link-row';
 import { Txt } from '@/components/ui/text';
 import { space } from '@/components/ui/theme/metrics';
-import { useColours } from '@/components/ui/theme/use-theme';
 import { type EntryRow } from '@/shared/entries/entry';
 
 interface Props {
@@ -19,56 +18,51 @@ interface Props {
 
 /** One entry in the journal: what, when, state, landing strip, profit; one target that leads to it. */
 export function EntryRowCard({ row, isChosen, showsTrader }: Props) {
-  const colours = useColours();
   const href =
     row.state === 'draft'
       ? ({ pathname: '/plan/[entryId]', params: { entryId: row.id } } as const)
       : ({ pathname: '/journal/[entryId]', params: { entryId: row.id } } as const);
   return (
-    <Link href={href} asChild>
-      <Pressable
-        role="link"
-        aria-current={isChosen ? 'page' : undefined}
-        style={({ pressed }) => ({
-          padding: space.rowPadding,
-          paddingHorizontal: space.cardPadding,
-          gap: 4,
-          backgroundColor: isChosen ? colours.brambleWash : pressed ? colours.well : undefined,
-        })}
+    <LinkRow
+      href={href}
+      isChosen={isChosen}
+      style={{ padding: space.rowPadding, paddingHorizontal: space.cardPadding, gap: 4 }}
+    >
+      <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 12, minHeight: 24 }}>
+        <Txt size="body" style={{ flexShrink: 1 }}>
+          <Txt size="body" weight="semibold">
+            {row.underlying.symbol}
+          </Txt>
+          {` ${row.structureName}`}
+        </Txt>
+        <Amount row={row} />
+      </View>
+      <View
+        style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 8, alignItems: 'center', minHeight: 24 }}
       >
-        <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 12, minHeight: 24 }}>
-          <Txt size="body" style={{ flexShrink: 1 }}>
-            <Txt size="body" weight="semibold">
-              {row.underlying.symbol}
-            </Txt>
-            {` ${row.structureName}`}
-          </Txt>
-          <Amount row={row} />
+        <Txt size="row" colour="inkSoft" style={{ flexShrink: 1 }}>
+          {showsTrader ? `${row.trader.displayName} · ${dates(row)}` : dates(row)}
+        </Txt>
+        <View style={{ flexDirection: 'row', gap: 8, alignItems: 'center' }}>
+          {row.isLateSeal ? <Chip kind="amber" icon="clock" label="late seal" /> : null}
+          {row.needsLesson ? <Chip kind="amber" label="lesson due" /> : null}
+          <StateBerry state={row.state} withWord />
         </View>
-        <View
-          style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 8, alignItems: 'center', minHeight: 24 }}
-        >
-          <Txt size="row" colour="inkSoft" style={{ flexShrink: 1 }}>
-            {showsTrader ? `${row.trader.displayName} · ${dates(row)}` : dates(row)}
-          </Txt>
-          <View style={{ flexDirection: 'row', gap: 8, alignItems: 'center' }}>
-            {row.isLateSeal ? <Chip kind="amber" icon="clock" label="late seal" /> : null}
-            {row.needsLesson ? <Chip kind="amber" label="lesson due" /> : null}
-            <StateBerry state={row.state} withWord />
-          </View>
-        </View>
-        <Strip row={row} />
-      </Pressable>
-    </Link>
+      </View>
+      <Strip row={row} />
+    </LinkRow>
   );
 }
 
 function Amount({ row }: { row: EntryRow }) {
-  if (row.realisedProfit !== null)
+  // A position that was only opened has realised nothing yet; 0.00 would read like a result.
+  const isOnlyOpened = row.state === 'open' && Number(row.realisedProfit) === 0;
+  if (row.realisedProfit !== null && !isOnlyOpened) {
     return <SignedAmount value={row.realisedProfit} currency={row.underlying.currency} size="body" />;
+  }
   return (
     <Txt size="row" colour="inkSoft">
-      {row.state === 'draft' ? 'plan' : 'no fills'}
+      {row.state === 'draft' ? 'plan' : isOnlyOpened ? 'running' : 'no fills'}
     </Txt>
   );
 }

@@ -54,7 +54,7 @@ export function PlannerColumns({ seal }: { seal: ReactNode }) {
         actions={
           <View style={{ flexDirection: 'row', gap: 24, alignItems: 'center' }}>
             <CautionLine />
-            {seal}
+            <View style={{ width: 176 }}>{seal}</View>
           </View>
         }
       />

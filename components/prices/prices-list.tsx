@@ -1,8 +1,9 @@
-import { Link, useRouter } from 'expo-router';
-import { Pressable, ScrollView, View } from 'react-native';
+import { useRouter } from 'expo-router';
+import { ScrollView, View } from 'react-native';
 import { PlaceInYear } from '@/components/charts/place-in-year';
 import { Button } from '@/components/ui/button';
 import { Chip } from '@/components/ui/chip';
+import { LinkRow } from '@/components/ui/link-row';
 import { formatDate, formatPercent } from '@/components/ui/number-format';
 import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
 import { Heading, Txt } from '@/components/ui/text';
@@ -78,66 +79,59 @@ function UnderlyingRow({ listed, isChosen, isFirst }: RowProps) {
   const change = lastBar === null || previousClose === null ? null : Number(lastBar.close) / Number(previousClose) - 1;
   return (
     <View role="listitem" style={{ borderTopWidth: isFirst ? 0 : 1, borderColor: colours.rule }}>
-      <Link href={{ pathname: '/prices/[underlyingId]', params: { underlyingId: underlying.id } }} asChild>
-        <Pressable
-          role="link"
-          aria-current={isChosen ? 'page' : undefined}
-          style={({ pressed }) => ({
-            padding: 12,
-            paddingHorizontal: 16,
-            gap: 6,
-            backgroundColor: isChosen ? colours.brambleWash : pressed ? colours.well : undefined,
-          })}
-        >
-          <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8, minHeight: 24 }}>
-            <Txt size="body" weight="semibold">
-              {underlying.symbol}
-            </Txt>
-            <View style={{ flex: 1 }}>
-              {lastBar === null ? (
-                <Txt size="note" colour="inkSoft">
-                  no bars yet
-                </Txt>
-              ) : sessionsBehind > 0 ? (
-                <View style={{ alignSelf: 'flex-start' }}>
-                  <Chip
-                    kind="amber"
-                    icon="clock"
-                    label={`${sessionsBehind} ${sessionsBehind === 1 ? 'session' : 'sessions'} old`}
-                  />
-                </View>
-              ) : (
-                <Txt size="note" colour="inkSoft">
-                  {formatDate(lastBar.sessionDate)}
-                </Txt>
-              )}
-            </View>
-            {lastBar === null ? null : (
-              <Txt size="body" weight="medium">
-                {lastBar.close}
+      <LinkRow
+        href={{ pathname: '/prices/[underlyingId]', params: { underlyingId: underlying.id } }}
+        isChosen={isChosen}
+        style={{ padding: 12, paddingHorizontal: 16, gap: 6 }}
+      >
+        <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8, minHeight: 24 }}>
+          <Txt size="body" weight="semibold">
+            {underlying.symbol}
+          </Txt>
+          <View style={{ flex: 1 }}>
+            {lastBar === null ? (
+              <Txt size="note" colour="inkSoft">
+                no bars yet
               </Txt>
-            )}
-            {change === null ? null : (
-              <Txt size="row" colour={change >= 0 ? 'tide' : 'rust'} style={{ minWidth: 60 }} align="right">
-                {formatPercent(change, 2, { sign: true })}
+            ) : sessionsBehind > 0 ? (
+              <View style={{ alignSelf: 'flex-start' }}>
+                <Chip
+                  kind="amber"
+                  icon="clock"
+                  label={`${sessionsBehind} ${sessionsBehind === 1 ? 'session' : 'sessions'} old`}
+                />
+              </View>
+            ) : (
+              <Txt size="note" colour="inkSoft">
+                {formatDate(lastBar.sessionDate)}
               </Txt>
             )}
           </View>
-          {volatility === null ? null : (
-            <View style={{ flexDirection: 'row', alignItems: 'center', gap: 12 }}>
-              <View style={{ flex: 1 }}>
-                <PlaceInYear {...volatility} current={volatility.dailyVolatility} />
-              </View>
-              <Txt size="row">
-                <Txt size="row" weight="semibold">
-                  {formatPercent(volatility.dailyVolatility, 2)}
-                </Txt>
-                {` ${Math.round(volatility.percentile)}`}
-              </Txt>
-            </View>
+          {lastBar === null ? null : (
+            <Txt size="body" weight="medium">
+              {lastBar.close}
+            </Txt>
           )}
-        </Pressable>
-      </Link>
+          {change === null ? null : (
+            <Txt size="row" colour={change >= 0 ? 'tide' : 'rust'} style={{ minWidth: 60 }} align="right">
+              {formatPercent(change, 2, { sign: true })}
+            </Txt>
+          )}
+        </View>
+        {volatility === null ? null : (
+          <View style={{ flexDirection: 'row', alignItems: 'center', gap: 12 }}>
+            <View style={{ flex: 1 }}>
+              <PlaceInYear {...volatility} current={volatility.dailyVolatility} />
+            </View>
+            <Txt size="row">
+              <Txt size="row" weight="semibold">
+                {formatPercent(volatility.dailyVolatility, 2)}
+              </Txt>
+              {` ${Math.round(volatility.percentile)}`}
+            </Txt>
+          </View>
+        )}
+      </LinkRow>
     </View>
   );
 }

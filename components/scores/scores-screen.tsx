@@ -70,12 +70,7 @@ function Figures({ scores }: { scores: Scores }) {
     >
       <View style={column}>
         <Card title="Calibration" subtitle="How often each level of odds came true">
-          <CalibrationPlot
-            bins={summary.bins}
-            curve={summary.curve}
-            thinBelow={20}
-            bandWords="95% intervals of the frequency"
-          />
+          <CalibrationPlot bins={summary.bins} curve={summary.curve} thinBelow={20} />
         </Card>
       </View>
       <View style={column}>

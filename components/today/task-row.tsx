@@ -1,7 +1,8 @@
-import { Link, type Href } from 'expo-router';
-import { Pressable, View } from 'react-native';
+import { type Href } from 'expo-router';
+import { View } from 'react-native';
 import { Icon } from '@/components/ui/icon';
 import { type IconName } from '@/components/ui/icon-shapes';
+import { LinkRow } from '@/components/ui/link-row';
 import { Txt } from '@/components/ui/text';
 import { useColours } from '@/components/ui/theme/use-theme';
 import { type TodayTask } from '@/shared/today/today-endpoints';
@@ -9,6 +10,7 @@ import { type TodayTask } from '@/shared/today/today-endpoints';
 const icons: Record<TodayTask['kind'], IconName> = {
   expiring: 'exercise',
   'past-expiry': 'exercise',
+  untraded: 'seal',
   'missing-prices': 'bars',
   'write-lesson': 'pencil',
   'seal-draft': 'seal',
@@ -27,44 +29,34 @@ export function TaskRow({ task, isFirst, href }: Props) {
   const isUrgent = task.group === 'before-next-open';
   return (
     <View role="listitem" style={{ borderTopWidth: isFirst ? 0 : 1, borderColor: colours.rule }}>
-      <Link href={href} asChild>
-        <Pressable
-          role="link"
-          style={({ pressed }) => ({
-            flexDirection: 'row',
-            gap: 12,
-            padding: 16,
-            backgroundColor: pressed ? colours.well : undefined,
-          })}
+      <LinkRow href={href} style={{ flexDirection: 'row', gap: 12, padding: 16 }}>
+        <View
+          style={{
+            width: 36,
+            height: 36,
+            borderRadius: 18,
+            alignItems: 'center',
+            justifyContent: 'center',
+            backgroundColor: isUrgent ? colours.amberWash : colours.well,
+          }}
         >
-          <View
-            style={{
-              width: 36,
-              height: 36,
-              borderRadius: 18,
-              alignItems: 'center',
-              justifyContent: 'center',
-              backgroundColor: isUrgent ? colours.amberWash : colours.well,
-            }}
-          >
-            <Icon name={icons[task.kind]} size={18} colour={isUrgent ? 'amber' : 'inkSoft'} />
-          </View>
-          <View style={{ flex: 1, gap: 2 }}>
-            <Txt size="body" weight="semibold">
-              {task.title}
+          <Icon name={icons[task.kind]} size={18} colour={isUrgent ? 'amber' : 'inkSoft'} />
+        </View>
+        <View style={{ flex: 1, gap: 2 }}>
+          <Txt size="body" weight="semibold">
+            {task.title}
+          </Txt>
+          <Txt size="row" colour="inkSoft">
+            {task.why}
+          </Txt>
+          <View style={{ flexDirection: 'row', alignItems: 'center', gap: 4 }}>
+            <Txt size="row" weight="semibold" colour="bramble">
+              {task.action}
             </Txt>
-            <Txt size="row" colour="inkSoft">
-              {task.why}
-            </Txt>
-            <View style={{ flexDirection: 'row', alignItems: 'center', gap: 4 }}>
-              <Txt size="row" weight="semibold" colour="bramble">
-                {task.action}
-              </Txt>
-              <Icon name="chevron-right" size={16} colour="bramble" />
-            </View>
+            <Icon name="chevron-right" size={16} colour="bramble" />
           </View>
-        </Pressable>
-      </Link>
+        </View>
+      </LinkRow>
     </View>
   );
 }

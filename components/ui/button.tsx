@@ -67,7 +67,7 @@ export function Button({
   const colours = useColours();
   const hintId = useId();
   const isOff = disabled || busy;
-  const ink: ColourName = disabled ? 'inkSoft' : (tone ?? inks[kind]);
+  const ink: ColourName = disabled ? 'inkSoft' : (tone ?? (iconOnly && kind === 'text' ? 'ink' : inks[kind]));
   // As state, not as a style function: a link hands its style on as a plain object.
   const [isPressed, setIsPressed] = useState(false);
   const style: ViewStyle = {

@@ -19,11 +19,8 @@ export class PasswordHasher {
   private dummyHash: Promise<string> | null = null;
 
   constructor(private readonly settings: HashSettings) {
-    const isSource = import.meta.url.endsWith('.ts');
     this.pool = new Piscina({
-      filename: new URL(isSource ? './password-hash-worker.ts' : './account/password-hash-worker.js', import.meta.url)
-        .href,
-      execArgv: isSource ? ['--import', 'tsx'] : [],
+      filename: workerFile().href,
       maxThreads: MOST_AT_ONCE,
       minThreads: 1,
       maxQueue: MOST_WAITING,
@@ -69,4 +66,13 @@ export class PasswordHasher {
       throw new TypeError('A password task gives text or a truth value.');
     return result;
   }
+}
+
+/** The bundled worker: beside the bundle in production, and in the same place when the source runs by itself under test. */
+function workerFile(): URL {
+  const isSource = import.meta.url.endsWith('.ts');
+  return new URL(
+    isSource ? '../../build/server/account/password-hash-worker.js' : './account/password-hash-worker.js',
+    import.meta.url,
+  );
 }

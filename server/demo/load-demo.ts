@@ -219,13 +219,14 @@ class DemoWriter {
     const draft = await services.entries.create(scope, { id: entryId, plan: demo.plan });
     await services.seals.seal(scope, { entryId, version: draft.row.version, requestId: 'demo' });
     const roll = random.next();
+    const isRecent = moment.market.bars.filter(({ sessionDate }) => sessionDate > moment.sessionDate).length < 4;
     if (roll < 0.12) {
       setTime(later(moment.closesAt, 60 * 24));
       const current = await services.entries.read(scope, entryId);
       await services.entries.abandon(scope, { entryId, version: current.row.version, requestId: 'demo' });
       return;
     }
-    if (roll < 0.18) return; // sealed and not yet traded
+    if (roll < 0.18 && isRecent) return; // sealed and not yet traded
     await this.trade(entryId, moment, demo);
   }
 
@@ -295,7 +296,7 @@ class DemoWriter {
         at: later(exitSession.closesAt, -4),
       });
     }
-    if (random.next() < 0.75) {
+    if (random.next() < 0.9) {
       setTime(later(exitSession.closesAt, 90));
       const current = await services.entries.read(scope, entryId);
       await services.entries.saveLesson(scope, {

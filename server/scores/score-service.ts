@@ -45,12 +45,12 @@ export class ScoreService {
               reliability: scores.binned.reliability,
               resolution: scores.binned.resolution,
               uncertainty: scores.binned.uncertainty,
-              bins: scores.curve.bins.map(({ forecast, observed, count, low, high }) => ({
+              bins: scores.curve.bins.map(({ forecast, observed, count, consistentLow, consistentHigh }) => ({
                 forecast,
                 observed,
                 count,
-                low,
-                high,
+                low: consistentLow,
+                high: consistentHigh,
               })),
               curve: scores.curve.points.map(({ probability, observed }) => ({ forecast: probability, observed })),
               sentence: scoreSentence(scores.curve.bins, inTime.length),

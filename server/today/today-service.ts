@@ -35,7 +35,11 @@ export class TodayService {
     const states = ['draft', 'sealed', 'open', 'closed', 'abandoned'] as const;
     const lists = await Promise.all(states.map((state) => entries.list(scope, { state, limit: MOST_LOOKED_AT })));
     const rows = lists.flatMap((list) => list.entries);
-    const running = rows.filter((row) => row.state === 'open' || row.state === 'sealed').sort(byExit);
+    const running = rows
+      .filter(
+        (row) => row.state === 'open' || (row.state === 'sealed' && (row.exitSessionDate ?? '') > lastClosed.date),
+      )
+      .sort(byExit);
     const brief = await scores.brief(scope);
     const own = rows.filter((row) => row.trader.id === scope.actor.personId);
     return {

@@ -12,7 +12,7 @@ export interface TodayFacts {
 
 /** What needs a trader, in the order it must be done. */
 export function todayTasks(facts: TodayFacts): TodayTask[] {
-  const tasks = [...expiries(facts), ...missingPrices(facts), ...lessons(facts), ...drafts(facts)];
+  const tasks = [...expiries(facts), ...untraded(facts), ...missingPrices(facts), ...lessons(facts), ...drafts(facts)];
   return tasks.length > 0 ? tasks : starts(facts);
 }
 
@@ -34,6 +34,19 @@ function expiries({ own, lastSessionDate, nextSessionDate }: TodayFacts): TodayT
         target: { kind: 'entry', entryId: row.id, section: isPast ? 'fills' : 'plan' },
       };
     });
+}
+
+function untraded({ own, lastSessionDate }: TodayFacts): TodayTask[] {
+  return own
+    .filter((row) => row.state === 'sealed' && row.exitSessionDate !== null && row.exitSessionDate <= lastSessionDate)
+    .map((row) => ({
+      kind: 'untraded',
+      group: 'from-today',
+      title: `${nameOf(row)} has no fills`,
+      why: 'Its planned exit has passed. Add the fills, or say that it was not traded; its odds are scored either way.',
+      action: 'Settle it',
+      target: { kind: 'entry', entryId: row.id, section: 'fills' },
+    }));
 }
 
 function missingPrices({ own, underlyings }: TodayFacts): TodayTask[] {

@@ -41,7 +41,7 @@ export const scoresSchema = z.strictObject({
       reliability: number,
       resolution: number,
       uncertainty: number,
-      /** Bins of equal width that hold at least one forecast. */
+      /** Bins of equal width that hold at least one forecast; low and high: where 90 % of the frequencies would fall were the odds right. */
       bins: z.array(z.strictObject({ forecast: number, observed: number, count: z.int(), low: number, high: number })),
       curve: z.array(z.strictObject({ forecast: number, observed: number })),
       sentence: z.string(),

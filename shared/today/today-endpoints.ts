@@ -6,7 +6,7 @@ import { roles } from '@/shared/contract/roles';
 import { entryRowSchema } from '@/shared/entries/entry';
 
 const taskSchema = z.strictObject({
-  kind: z.enum(['expiring', 'past-expiry', 'missing-prices', 'write-lesson', 'seal-draft', 'start']),
+  kind: z.enum(['expiring', 'past-expiry', 'untraded', 'missing-prices', 'write-lesson', 'seal-draft', 'start']),
   /** When it must be done. */
   group: z.enum(['before-next-open', 'from-today', 'when-ready']),
   title: z.string(),
