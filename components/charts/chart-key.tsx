@@ -17,9 +17,9 @@ export function ChartKey({ items }: { items: readonly KeyItem[] }) {
   const colours = useColours();
   if (items.length === 0) return null;
   return (
-    <View style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: 14, rowGap: 4 }}>
+    <View style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: 10, rowGap: 4 }}>
       {items.map(({ key, mark, text, value }) => (
-        <View key={key} style={{ flexDirection: 'row', alignItems: 'center', gap: 6, flexShrink: 1 }}>
+        <View key={key} style={{ flexDirection: 'row', alignItems: 'center', gap: 4, flexShrink: 1 }}>
           {mark === undefined ? null : (
             <View aria-hidden style={{ width: 16, height: 16 }}>
               <Svg width={16} height={16}>
