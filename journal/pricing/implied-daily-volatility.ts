@@ -1,7 +1,6 @@
-import { normalDensity } from '@/journal/distributions/normal-distribution';
 import { DomainError } from '@/journal/errors/domain-error';
 import { type EuropeanOption } from '@/journal/pricing/european-option';
-import { outOfTheMoneyPrice } from '@/journal/pricing/out-of-the-money';
+import { outOfTheMoneyTerms } from '@/journal/pricing/out-of-the-money';
 
 export type ImpliedQuestion = Omit<EuropeanOption, 'dailyVolatility'> & {
   /** Currency per share; any finite number, so that a quote with no solution can be told apart. */
@@ -18,12 +17,15 @@ export type ImpliedVolatility =
     };
 
 const LARGEST_TOTAL_DEVIATION = 60;
+const CLOSE_ENOUGH = 1e-7;
+/** From then on only bisection, which is sure to end. */
+const MOST_HALLEY_STEPS = 50;
 
 /**
  * Daily volatility that reproduces a price on the session clock.
  * @returns the volatility, to the last digits the price can carry, or the bound that rules a solution out.
  * @throws {DomainError} `option-input-invalid` for numbers outside their range.
- * @see safeguarded Newton on the logarithm of the out-of-the-money price, after Manaster and Koehler (1982), J. Finance 37,
+ * @see safeguarded Halley steps on the logarithm of the out-of-the-money price, after Manaster and Koehler (1982), J. Finance 37,
  *   and Jäckel (2015), Let's be rational, Wilmott; the bounds are Merton's (1973).
  */
 export function impliedDailyVolatility(question: ImpliedQuestion): ImpliedVolatility {
@@ -42,29 +44,32 @@ export function impliedDailyVolatility(question: ImpliedQuestion): ImpliedVolati
   return { kind: 'found', dailyVolatility: totalDeviation / Math.sqrt(sessions) };
 }
 
-/** Total deviation at which the out-of-the-money option of the pair is worth `timeValue`. */
+/**
+ * Total deviation x at which the out-of-the-money option of the pair is worth `timeValue`. Solved as ln(price) in ln x, which is
+ * nearly straight close to the money and nearly exponential far from it: Halley's step fits both.
+ */
 function solveTotalDeviation(presentSpot: number, presentStrike: number, timeValue: number): number {
-  const logMoneyness = Math.log(presentSpot / presentStrike);
-  const target = Math.log(timeValue);
+  const moneyness = Math.log(presentSpot / presentStrike);
+  const share = timeValue / Math.min(presentSpot, presentStrike);
   let low = 0;
   let high = LARGEST_TOTAL_DEVIATION;
   // At the money the price is about 0.4 S x; far from it ln(price) is about -(ln moneyness)²/(2x²).
-  const nearGuess = (timeValue * 2.5066) / Math.min(presentSpot, presentStrike);
-  const farGuess =
-    Math.abs(logMoneyness) / Math.sqrt(Math.max(1, -2 * Math.log(timeValue / Math.min(presentSpot, presentStrike))));
-  let x = Math.max(nearGuess, farGuess, 1e-12);
-  for (let step = 0; step < 300; step += 1) {
-    const value = outOfTheMoneyPrice(presentSpot, presentStrike, x);
-    const error = Math.log(value) - target; // -Infinity where the price underflows: then x is too small
+  let x = Math.max(share * 2.5066, Math.abs(moneyness) / Math.sqrt(Math.max(1, -2 * Math.log(share))), 1e-12);
+  for (let step = 1; ; step += 1) {
+    const { price, spotDensity } = outOfTheMoneyTerms(presentSpot, presentStrike, x);
+    const error = Math.log(price / timeValue); // -Infinity where the price underflows: then x is too small
     if (error > 0) high = x;
     else low = x;
-    const slope = (presentSpot * normalDensity(logMoneyness / x + x / 2)) / value;
-    // In log x the log price is concave and nearly straight far out, so the step is taken there.
-    const newton = x * Math.exp(-error / (slope * x));
-    if (Math.abs(newton - x) <= 2e-16 * x) return newton;
-    x = newton > low && newton < high ? newton : middle(low, high);
+    const elasticity = (x * spotDensity) / price; // d ln(price) / d ln(x)
+    const curvature = 1 + (moneyness / x) ** 2 - x ** 2 / 4 - elasticity; // of the same, over the elasticity
+    const newton = -error / elasticity;
+    const halley = newton / Math.max(0.5, 1 + (newton * curvature) / 2);
+    const next = x * Math.exp(halley);
+    // Convergence is of third order: once a step is this small, what is left after it is below one rounding.
+    if (Math.abs(halley) <= CLOSE_ENOUGH) return next;
+    x = step < MOST_HALLEY_STEPS && next > low && next < high ? next : middle(low, high);
+    if (x === low || x === high) return x; // neighbouring doubles: the price cannot tell more
   }
-  return x;
 }
 
 /** Between two brackets: geometric once both are positive, since the answer spans many orders of magnitude. */

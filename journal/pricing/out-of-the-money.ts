@@ -1,10 +1,8 @@
-import { expMinusHalfSquare, normalUpperTail, scaledUpperTail } from '@/journal/distributions/normal-distribution';
+import { expMinusHalfSquare, scaledUpperTail, upperTailWithBell } from '@/journal/distributions/normal-distribution';
 
-const ROOT_TWO_PI = 2.5066282746310002;
+const ONE_OVER_ROOT_TWO_PI = 0.3989422804014327;
 /** From here on tails are taken as a ratio to their exponential, which the two terms of a price share. */
 const TAIL_STARTS = 0.7;
-/** Deviations at which the normal tail is 0 in doubles. */
-const VANISHED = 40;
 
 /**
  * Value of whichever of call and put is out of the money.
@@ -23,12 +21,12 @@ export function outOfTheMoneyPrice(presentSpot: number, presentStrike: number, t
   const moneyness = logRatio(larger, smaller) / totalDeviation;
   const near = moneyness - totalDeviation / 2;
   const far = moneyness + totalDeviation / 2;
-  if (near > VANISHED) return 0;
   // Both terms carry the same exponential, smaller·φ(near) = larger·φ(far); taken once, its rounding cannot part them.
+  const bell = expMinusHalfSquare(near);
   const price =
     near > TAIL_STARTS
-      ? smaller * expMinusHalfSquare(near) * (scaledUpperTail(near) - scaledUpperTail(far))
-      : smaller * normalUpperTail(near) - larger * normalUpperTail(far);
+      ? smaller * bell * (scaledUpperTail(near) - scaledUpperTail(far))
+      : smaller * upperTailWithBell(near, bell) - larger * upperTailWithBell(far, bell * (smaller / larger));
   return price > 0 ? price : 0;
 }
 
@@ -64,8 +62,8 @@ export function outOfTheMoneyTerms(
   const moneyness = logRatio(larger, smaller) / totalDeviation;
   const near = moneyness - totalDeviation / 2;
   const far = moneyness + totalDeviation / 2;
-  if (near > VANISHED) return { price: 0, spotTail: 0, strikeTail: 0, spotDensity: 0 };
   const bell = expMinusHalfSquare(near);
+  const farBell = bell * (smaller / larger);
   let nearTail: number;
   let farTail: number;
   let price: number;
@@ -73,18 +71,18 @@ export function outOfTheMoneyTerms(
     const nearRatio = scaledUpperTail(near);
     const farRatio = scaledUpperTail(far);
     nearTail = bell * nearRatio;
-    farTail = bell * (smaller / larger) * farRatio;
+    farTail = farBell * farRatio;
     price = smaller * bell * (nearRatio - farRatio);
   } else {
-    nearTail = normalUpperTail(near);
-    farTail = normalUpperTail(far);
+    nearTail = upperTailWithBell(near, bell);
+    farTail = upperTailWithBell(far, farBell);
     price = smaller * nearTail - larger * farTail;
   }
   return {
     price: price > 0 ? price : 0,
     spotTail: isSpotLarger ? farTail : nearTail,
     strikeTail: isSpotLarger ? nearTail : farTail,
-    spotDensity: (smaller * bell) / ROOT_TWO_PI,
+    spotDensity: smaller * bell * ONE_OVER_ROOT_TWO_PI,
   };
 }
 
