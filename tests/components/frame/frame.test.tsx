@@ -4,6 +4,7 @@ import { AppFrame } from '@/components/frame/app-frame';
 import { ListDetail } from '@/components/frame/list-detail';
 import { placeOf } from '@/components/frame/places';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { Txt } from '@/components/ui/text';
 
 // The frame only asks the router where it is; its links are plain ones here.
 jest.mock('expo-router', () => {
@@ -15,6 +16,8 @@ jest.mock('expo-router', () => {
   };
 });
 
+const text = <Txt>text</Txt>;
+const rows = <Txt>the rows</Txt>;
 const person = { displayName: 'Mara Quill', deskName: 'Alder Lane' };
 
 function setWidth(width: number): void {
@@ -31,7 +34,7 @@ describe.each([
   it('leads to the five places and marks the one the address belongs to', () => {
     render(
       <AppFrame person={person} badges={{ today: 6 }}>
-        <ScreenFrame title="Plan a trade">text</ScreenFrame>
+        <ScreenFrame title="Plan a trade">{text}</ScreenFrame>
       </AppFrame>,
     );
     const navigation = screen.getByRole('navigation', { name: 'Places' });
@@ -46,7 +49,7 @@ describe.each([
   it('names page and tab by the title of the screen, in one main landmark', () => {
     render(
       <AppFrame>
-        <ScreenFrame title="Plan a trade">text</ScreenFrame>
+        <ScreenFrame title="Plan a trade">{text}</ScreenFrame>
       </AppFrame>,
     );
     expect(screen.getByRole('heading', { level: 1, name: 'Plan a trade' })).toBeTruthy();
@@ -61,7 +64,7 @@ describe('the bottom bar', () => {
     const page = (hides: boolean) => (
       <AppFrame>
         <ScreenFrame title="Plan" hideBottomBar={hides}>
-          text
+          {text}
         </ScreenFrame>
       </AppFrame>
     );
@@ -75,20 +78,20 @@ describe('the bottom bar', () => {
 describe('ListDetail', () => {
   const detail = (
     <ScreenFrame title="HVYQ 102 call" back={{ label: 'Journal', onPress: () => undefined }}>
-      text
+      {text}
     </ScreenFrame>
   );
 
   it('shows the detail alone on a phone, with the way back', () => {
     setWidth(390);
-    render(<ListDetail title="Journal" list="the rows" detail={detail} />);
+    render(<ListDetail title="Journal" list={rows} detail={detail} />);
     expect(screen.queryByText('the rows')).toBeNull();
     expect(screen.getByRole('button', { name: 'Back to Journal' })).toBeTruthy();
   });
 
   it('shows both side by side when wide, without the way back to what is in sight', () => {
     setWidth(1440);
-    render(<ListDetail title="Journal" list="the rows" detail={detail} />);
+    render(<ListDetail title="Journal" list={rows} detail={detail} />);
     expect(screen.getByRole('region', { name: 'Journal' }).textContent).toBe('the rows');
     expect(screen.queryByRole('button', { name: 'Back to Journal' })).toBeNull();
     expect(screen.getAllByRole('main')).toHaveLength(1);
@@ -96,7 +99,7 @@ describe('ListDetail', () => {
 
   it('makes the list the main landmark and names the tab after it while nothing is chosen', () => {
     setWidth(1440);
-    render(<ListDetail title="Journal" list="the rows" detail={null} />);
+    render(<ListDetail title="Journal" list={rows} detail={null} />);
     expect(screen.getByRole('main').textContent).toBe('the rows');
     expect(document.title).toBe('Journal · Brierbook');
   });
