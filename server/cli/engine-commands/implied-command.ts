@@ -1,0 +1,15 @@
+import { z } from 'zod';
+import { impliedDailyVolatility } from '@/journal/pricing/implied-daily-volatility';
+import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+import { optionCaseFields, optionOfCase } from '@/server/cli/engine-commands/option-case';
+
+/** Daily volatility of a price; null, with the bound that was broken and its value, for a price that no volatility gives. */
+export const impliedCommand = engineCommand(
+  z.strictObject({ ...optionCaseFields, price: z.number() }),
+  ({ price, ...option }) => {
+    const answer = impliedDailyVolatility({ ...optionOfCase(option), price });
+    return answer.kind === 'found'
+      ? { dailyVolatility: answer.dailyVolatility }
+      : { dailyVolatility: null, bound: answer.bound, limit: answer.limit };
+  },
+);

@@ -1,0 +1,22 @@
+import { z } from 'zod';
+import { DomainError } from '@/journal/errors/domain-error';
+import { countSessions } from '@/journal/sessions/exchange-calendar';
+import { sessionsBetween } from '@/journal/sessions/session-clock';
+import { isSessionDate } from '@/journal/sessions/session-date';
+import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
+import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+
+const sessionsCaseSchema = z.strictObject({
+  from: z.string(),
+  to: z.string(),
+  overnightShare: z.number().default(0.3),
+});
+
+/** Sessions after one date through another, or the session clock between two instants. */
+export const sessionsCommand = engineCommand(sessionsCaseSchema, ({ from, to, overnightShare }) => {
+  if (isSessionDate(from) && isSessionDate(to)) {
+    return { sessions: countSessions(usOptionsCalendar, { after: from, through: to }) };
+  }
+  if (isSessionDate(from) || isSessionDate(to)) throw new DomainError('date-and-instant-mixed', { from, to });
+  return { sessions: sessionsBetween({ calendar: usOptionsCalendar, from, to, settings: { overnightShare } }) };
+});
