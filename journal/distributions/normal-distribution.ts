@@ -24,7 +24,7 @@ export function normalDensity(x: number): number {
  * @see Cody (1969) and Algorithm 715, which cut after four places and pay for a second exponential.
  */
 export function expMinusHalfSquare(x: number): number {
-  if (x > VANISHED || x < -VANISHED) return 0;
+  if (Math.abs(x) > VANISHED) return 0;
   const cut = Math.trunc(x * CUT_SCALE) * CUT_UNIT;
   const rest = 0.5 * (x - cut) * (x + cut); // 0 to 4e-5
   return Math.exp(-0.5 * cut * cut) * (1 - rest * (1 - rest * (0.5 - rest * ONE_SIXTH)));

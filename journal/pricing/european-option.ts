@@ -1,5 +1,5 @@
 import { DomainError } from '@/journal/errors/domain-error';
-import { outOfTheMoneyPrice, outOfTheMoneyTerms } from '@/journal/pricing/out-of-the-money';
+import { outOfTheMoneyPrice, outOfTheMoneyTerms, priceOfRatio } from '@/journal/pricing/out-of-the-money';
 
 /** A European option on two clocks: variance by sessions, money by calendar years. */
 export interface EuropeanOption {
@@ -50,29 +50,22 @@ const ONE_DAY_IN_YEARS = 1 / 365;
 export function europeanOptionPrice(option: EuropeanOption): number {
   checkOption(option);
   const { type, spotPrice, strikePrice, dailyVolatility, sessions, years, ratePerYear, dividendYield } = option;
-  return presentPrice(
-    type,
-    spotPrice * growth(-dividendYield * years),
-    strikePrice * growth(-ratePerYear * years),
-    dailyVolatility * Math.sqrt(sessions),
-  );
-}
-
-/** The exponential function; most stocks pay no yield, and asking is quicker than computing. */
-function growth(exponent: number): number {
-  return exponent === 0 ? 1 : Math.exp(exponent);
-}
-
-/** In the money by parity, so that the time value keeps its digits. */
-function presentPrice(
-  type: 'call' | 'put',
-  presentSpot: number,
-  presentStrike: number,
-  totalDeviation: number,
-): number {
-  const outOfTheMoney = outOfTheMoneyPrice(presentSpot, presentStrike, totalDeviation);
+  const presentSpot = spotPrice * growth(-dividendYield * years);
+  const presentStrike = strikePrice * growth(-ratePerYear * years);
+  const outOfTheMoney = outOfTheMoneyPrice(presentSpot, presentStrike, dailyVolatility * Math.sqrt(sessions));
+  // In the money by parity, so that the time value keeps its digits.
   const intrinsic = type === 'call' ? presentSpot - presentStrike : presentStrike - presentSpot;
   return intrinsic > 0 ? outOfTheMoney + intrinsic : outOfTheMoney;
+}
+
+/**
+ * The exponential function. Most stocks pay no yield, and over one session interest is so small that five terms of the series
+ * have all digits.
+ */
+function growth(exponent: number): number {
+  if (exponent === 0) return 1;
+  if (Math.abs(exponent) > 1e-3) return Math.exp(exponent);
+  return 1 + exponent * (1 + exponent * (0.5 + exponent * (1 / 6 + exponent / 24)));
 }
 
 /**
@@ -104,13 +97,19 @@ export function europeanOptionValue(
   const hedge = isInTheMoney ? 1 - terms.spotTail : terms.spotTail;
   const oddsInTheMoney = isInTheMoney ? 1 - terms.strikeTail : terms.strikeTail;
   const isOver = sessions <= 1;
-  const yearsLater = isOver ? 0 : Math.max(years - yearsPerNextSession, 0);
-  const priceLater = presentPrice(
-    type,
-    spotPrice * growth(-dividendYield * yearsLater),
-    strikePrice * growth(-ratePerYear * yearsLater),
-    isOver ? 0 : dailyVolatility * Math.sqrt(sessions - 1),
-  );
+  const elapsedYears = isOver ? years : Math.min(yearsPerNextSession, years);
+  const spotLater = presentSpot * growth(dividendYield * elapsedYears);
+  const strikeLater = presentStrike * growth(ratePerYear * elapsedYears);
+  const intrinsicLater = sign * (spotLater - strikeLater);
+  const timeValueLater = isOver
+    ? 0
+    : outOfTheMoneyLater(
+        spotLater,
+        strikeLater,
+        terms.logMoneyness + (dividendYield - ratePerYear) * elapsedYears,
+        dailyVolatility * Math.sqrt(sessions - 1),
+      );
+  const priceLater = intrinsicLater > 0 ? timeValueLater + intrinsicLater : timeValueLater;
   return {
     price,
     delta: sign * carry * hedge,
@@ -120,6 +119,12 @@ export function europeanOptionValue(
     rhoPerPercent: sign * years * presentStrike * oddsInTheMoney * 0.01,
     oddsInTheMoney,
   };
+}
+
+/** As outOfTheMoneyPrice, the logarithm carried on from a session before. */
+function outOfTheMoneyLater(spot: number, strike: number, logMoneyness: number, totalDeviation: number): number {
+  if (!(totalDeviation > 0)) return 0;
+  return priceOfRatio(Math.max(spot, strike), Math.min(spot, strike), Math.abs(logMoneyness), totalDeviation);
 }
 
 function checkOption(option: EuropeanOption): void {

@@ -14,11 +14,18 @@ const TAIL_STARTS = 0.7;
  *   smaller·P(Z > near) − larger·P(Z > far).
  */
 export function outOfTheMoneyPrice(presentSpot: number, presentStrike: number, totalDeviation: number): number {
-  if (!(totalDeviation > 0)) return 0;
-  const isSpotLarger = presentSpot > presentStrike;
-  const larger = isSpotLarger ? presentSpot : presentStrike;
-  const smaller = isSpotLarger ? presentStrike : presentSpot;
-  const moneyness = logRatio(larger, smaller) / totalDeviation;
+  const larger = Math.max(presentSpot, presentStrike);
+  const smaller = Math.min(presentSpot, presentStrike);
+  return totalDeviation > 0 ? priceOfRatio(larger, smaller, logRatio(larger, smaller), totalDeviation) : 0;
+}
+
+/**
+ * The same where ln(larger / smaller) is known from elsewhere. Numbers by position, not in an object: this is the innermost
+ * step of every lattice and search.
+ * @param larger the larger present value, `smaller` the other; `logOfRatio` 0 or more; `totalDeviation` above 0.
+ */
+export function priceOfRatio(larger: number, smaller: number, logOfRatio: number, totalDeviation: number): number {
+  const moneyness = logOfRatio / totalDeviation;
   const near = moneyness - totalDeviation / 2;
   const far = moneyness + totalDeviation / 2;
   // Both terms carry the same exponential, smaller·φ(near) = larger·φ(far); taken once, its rounding cannot part them.
@@ -39,6 +46,8 @@ export interface OutOfTheMoneyTerms {
   readonly strikeTail: number;
   /** Present spot times φ(d1), which equals present strike times φ(d2). */
   readonly spotDensity: number;
+  /** ln(present spot / present strike). */
+  readonly logMoneyness: number;
 }
 
 /**
@@ -55,11 +64,13 @@ export function outOfTheMoneyTerms(
   const isSpotLarger = presentSpot > presentStrike;
   const larger = isSpotLarger ? presentSpot : presentStrike;
   const smaller = isSpotLarger ? presentStrike : presentSpot;
+  const logOfRatio = logRatio(larger, smaller);
+  const logMoneyness = isSpotLarger ? logOfRatio : -logOfRatio;
   if (!(totalDeviation > 0)) {
     const tail = larger === smaller ? 0.5 : 0;
-    return { price: 0, spotTail: tail, strikeTail: tail, spotDensity: 0 };
+    return { price: 0, spotTail: tail, strikeTail: tail, spotDensity: 0, logMoneyness };
   }
-  const moneyness = logRatio(larger, smaller) / totalDeviation;
+  const moneyness = logOfRatio / totalDeviation;
   const near = moneyness - totalDeviation / 2;
   const far = moneyness + totalDeviation / 2;
   const bell = expMinusHalfSquare(near);
@@ -83,6 +94,7 @@ export function outOfTheMoneyTerms(
     spotTail: isSpotLarger ? farTail : nearTail,
     strikeTail: isSpotLarger ? nearTail : farTail,
     spotDensity: smaller * bell * ONE_OVER_ROOT_TWO_PI,
+    logMoneyness,
   };
 }
 

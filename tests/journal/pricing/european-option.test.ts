@@ -177,7 +177,8 @@ describe('European option: properties', () => {
           years: isOver ? 0 : Math.max(option.years - yearsPerNextSession, 0),
         });
         const { price, thetaPerSession } = europeanOptionValue(option, yearsPerNextSession);
-        expect(thetaPerSession).toBe(later - price);
+        // Carried on from today's present values, it may differ from a fresh price by the rounding of those.
+        expect(Math.abs(thetaPerSession - (later - price))).toBeLessThanOrEqual(roundingOf(option, 4));
       }),
     );
   });
