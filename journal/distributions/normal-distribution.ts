@@ -24,7 +24,9 @@ export function normalDensity(x: number): number {
  * @see Cody (1969) and Algorithm 715, which cut after four places and pay for a second exponential.
  */
 export function expMinusHalfSquare(x: number): number {
-  if (Math.abs(x) > VANISHED) return 0;
+  const square = x * x;
+  if (square < 2) return Math.exp(-0.5 * square); // rounding it costs no more than the exponential's own
+  if (square > VANISHED * VANISHED) return 0;
   const cut = Math.trunc(x * CUT_SCALE) * CUT_UNIT;
   const rest = 0.5 * (x - cut) * (x + cut); // 0 to 4e-5
   return Math.exp(-0.5 * cut * cut) * (1 - rest * (1 - rest * (0.5 - rest * ONE_SIXTH)));
@@ -134,7 +136,7 @@ export function upperTailWithBell(x: number, bell: number): number {
 /**
  * Quantile of the standard normal distribution.
  * @param probability strictly between 0 and 1.
- * @returns x with P(Z <= x) = probability, relative accuracy about 1e-15.
+ * @returns x with P(Z <= x) = probability, accuracy about 1e-16 absolute near the centre and 4e-16 relative in the tails.
  * @throws {DomainError} `probability-out-of-range`.
  * @see Newton's method on the logarithm of the tail, which is concave, so that it converges from the outside.
  */

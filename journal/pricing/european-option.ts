@@ -65,7 +65,7 @@ export function europeanOptionPrice(option: EuropeanOption): number {
 function growth(exponent: number): number {
   if (exponent === 0) return 1;
   if (Math.abs(exponent) > 1e-3) return Math.exp(exponent);
-  return 1 + exponent * (1 + exponent * (0.5 + exponent * (1 / 6 + exponent / 24)));
+  return 1 + exponent * (1 + exponent * (0.5 + exponent * (1 / 6 + exponent * (1 / 24))));
 }
 
 /**
