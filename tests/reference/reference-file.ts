@@ -20,7 +20,7 @@ export function numberOf(one: ReferenceCase, field: string): number {
   return value;
 }
 
-export function optionTypeOf(one: ReferenceCase): 'call' | 'put' {
+function optionTypeOf(one: ReferenceCase): 'call' | 'put' {
   if (one.type !== 'call' && one.type !== 'put') throw new Error(`${one.id} has no option type`);
   return one.type;
 }
