@@ -24,7 +24,10 @@ export function AccountPage({ title, children, foot }: Props) {
       style={{ backgroundColor: isWide ? colours.paper : colours.sheet }}
       contentContainerStyle={{ flexGrow: 1, flexDirection: isWide ? 'row' : 'column' }}
     >
-      <View style={{ flexGrow: isWide ? 920 : 0, flexBasis: isWide ? 0 : 'auto', backgroundColor: colours.paper }}>
+      <View
+        role="banner"
+        style={{ flexGrow: isWide ? 920 : 0, flexBasis: isWide ? 0 : 'auto', backgroundColor: colours.paper }}
+      >
         <Introduction isWide={isWide} />
       </View>
       <View
@@ -33,8 +36,9 @@ export function AccountPage({ title, children, foot }: Props) {
           flexGrow: isWide ? 520 : 1,
           flexBasis: isWide ? 0 : 'auto',
           backgroundColor: colours.sheet,
-          justifyContent: 'center',
+          justifyContent: isWide ? 'center' : 'flex-start',
           padding: isWide ? 56 : space.gutterPhone,
+          paddingTop: isWide ? 56 : 28,
           gap: 20,
         }}
       >

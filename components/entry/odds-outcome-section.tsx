@@ -4,7 +4,7 @@ import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Card } from '@/components/ui/card';
 import { formatDate } from '@/components/ui/number-format';
 import { Rule } from '@/components/ui/rule';
-import { Txt } from '@/components/ui/text';
+import { type Entry } from '@/shared/entries/entry';
 import { oddsStatement } from '@/shared/entries/odds-statement';
 
 /** Each stated probability with its outcome and Brier score beside the market's odds; pending ones say for what they wait. */
@@ -37,17 +37,8 @@ export function OddsOutcomeSection({ entry }: { entry: SealedEntry }) {
                 marketImplied={odds.marketImplied ?? undefined}
                 outcome={happened === null ? undefined : happened ? 1 : 0}
                 due={happened === null ? formatDate(odds.dueSessionDate, 'short') : undefined}
+                footNote={footNote(result)}
               />
-              <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 12, flexWrap: 'wrap' }}>
-                <Txt size="note" colour="inkSoft">
-                  {`low to high volatility${result?.monitoredBy === 'closes' ? '; judged by closes, the bars have no highs and lows' : ''}`}
-                </Txt>
-                <Txt size="note" colour="inkSoft">
-                  {result?.brierScore != null
-                    ? `Brier ${result.brierScore.toFixed(result.brierScore < 0.1 ? 3 : 2)}${result.marketBrierScore === null ? '' : `, market ${result.marketBrierScore.toFixed(result.marketBrierScore < 0.1 ? 3 : 2)}`}`
-                    : (result?.waitsFor ?? `due ${formatDate(odds.dueSessionDate, 'short')}`)}
-                </Txt>
-              </View>
             </View>
           );
         })}
@@ -55,4 +46,15 @@ export function OddsOutcomeSection({ entry }: { entry: SealedEntry }) {
       </View>
     </Card>
   );
+}
+
+type Resolved = NonNullable<Entry['outcome']>['odds'][number];
+
+/** The score once there is one, else what is waited for. */
+function footNote(result: Resolved | undefined): string | undefined {
+  if (result === undefined) return undefined;
+  if (result.brierScore === null) return result.waitsFor === null ? undefined : `waits for ${result.waitsFor}`;
+  const score = (value: number) => value.toFixed(value < 0.1 ? 3 : 2);
+  const market = result.marketBrierScore === null ? '' : `, market ${score(result.marketBrierScore)}`;
+  return `Brier ${score(result.brierScore)}${market}${result.monitoredBy === 'closes' ? ', judged by closes' : ''}`;
 }

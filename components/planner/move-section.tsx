@@ -24,6 +24,7 @@ export function MoveSection() {
   const rungs = useLadderRungs();
   const problem = useProblemOf('volatility.source');
   const isTyped = volatility.source === 'typed';
+  const { kind: layout } = useLayout();
 
   const choose = (key: string) => {
     const window = volatilityWindows.find((value) => key === `window-${value}`);
@@ -40,6 +41,7 @@ export function MoveSection() {
             rungs={rungs}
             chosenKey={isTyped ? null : rungKey(volatility)}
             onChoose={choose}
+            rungHeight={layout === 'wide' ? 28 : undefined}
             implied={implied === null ? undefined : { mid: implied }}
           />
         ) : (

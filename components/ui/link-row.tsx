@@ -1,6 +1,6 @@
 import { Link, type Href } from 'expo-router';
 import { useState, type ReactNode } from 'react';
-import { Pressable, type StyleProp, type ViewStyle } from 'react-native';
+import { Pressable, StyleSheet, type StyleProp, type ViewStyle } from 'react-native';
 import { useColours } from '@/components/ui/theme/use-theme';
 
 interface Props {
@@ -13,7 +13,7 @@ interface Props {
 /** A row that is one link as a whole. */
 export function LinkRow({ href, isChosen = false, style, children }: Props) {
   const colours = useColours();
-  // A link hands its style on as it is, so what depends on the press is kept here.
+  // A link hands on one plain style object only, so what depends on the press is kept here.
   const [isPressed, setIsPressed] = useState(false);
   const ground = isChosen ? colours.brambleWash : isPressed ? colours.well : undefined;
   return (
@@ -23,7 +23,7 @@ export function LinkRow({ href, isChosen = false, style, children }: Props) {
         aria-current={isChosen ? 'page' : undefined}
         onPressIn={() => setIsPressed(true)}
         onPressOut={() => setIsPressed(false)}
-        style={[{ backgroundColor: ground }, style]}
+        style={StyleSheet.flatten([{ backgroundColor: ground }, style])}
       >
         {children}
       </Pressable>

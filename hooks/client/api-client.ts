@@ -9,6 +9,9 @@ import {
 import { apiErrorSchema } from '@/shared/contract/error-codes';
 import { apiRoot, requestHeader } from '@/shared/contract/request-headers';
 
+/** Browsers let 64 kB of such writes wait together; characters may take more than a byte. */
+const KEEPALIVE_LIMIT = 16_000;
+
 /** What one call needs; parts the endpoint does not take are left out. */
 export interface CallInput<E extends Endpoint> {
   readonly params?: ParamsOf<E>;
@@ -41,13 +44,16 @@ async function send<E extends Endpoint>(
   if (endpoint.method !== 'GET') headers.set(requestHeader.name, requestHeader.value);
   if (version !== undefined) headers.set('if-match', String(version));
   if (endpoint.body !== 'file' && body !== undefined) headers.set('content-type', 'application/json');
+  const text = endpoint.body === 'file' || body === undefined ? undefined : JSON.stringify(body);
   try {
     return await fetch(urlOf(endpoint, params, query), {
       method: endpoint.method,
       headers,
-      body: endpoint.body === 'file' ? fileForm(body) : body === undefined ? undefined : JSON.stringify(body),
+      body: endpoint.body === 'file' ? fileForm(body) : text,
       signal,
       credentials: 'same-origin',
+      // A small write goes on when the page is left or reloaded while it is under way.
+      keepalive: endpoint.method !== 'GET' && endpoint.body !== 'file' && (text?.length ?? 0) < KEEPALIVE_LIMIT,
     });
   } catch (error) {
     if (error instanceof DOMException && error.name === 'AbortError') throw error;

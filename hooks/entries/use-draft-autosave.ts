@@ -82,6 +82,8 @@ export function useDraftAutosave(entry: Entry, onSaved: (entry: Entry) => void):
   const changed = useCallback(
     (draft: DraftPlan) => {
       pending.current = draft;
+      // What is typed is not saved yet, and the page says so from the first letter on.
+      setSaving((before) => (before.kind === 'saved' ? { kind: 'saving' } : before));
       if (timer.current !== null) clearTimeout(timer.current);
       timer.current = setTimeout(() => void start(), PAUSE_BEFORE_SAVING_MS);
     },
@@ -104,8 +106,10 @@ export function useDraftAutosave(entry: Entry, onSaved: (entry: Entry) => void):
       if (pending.current !== null) void start();
     };
     document.addEventListener('visibilitychange', leave);
+    window.addEventListener('pagehide', leave);
     return () => {
       document.removeEventListener('visibilitychange', leave);
+      window.removeEventListener('pagehide', leave);
       leave();
     };
   }, [start]);

@@ -1,4 +1,4 @@
-import { jStat } from 'jstat';
+import jstat from 'jstat';
 import { searchQuantile } from '@/journal/distributions/quantile-search';
 import { DomainError } from '@/journal/errors/domain-error';
 
@@ -11,7 +11,7 @@ import { DomainError } from '@/journal/errors/domain-error';
  */
 export function chiSquareCumulative(x: number, degreesOfFreedom: number): number {
   checkDegrees(degreesOfFreedom);
-  return x <= 0 ? 0 : jStat.lowRegGamma(degreesOfFreedom / 2, x / 2);
+  return x <= 0 ? 0 : jstat.jStat.lowRegGamma(degreesOfFreedom / 2, x / 2);
 }
 
 /**
@@ -26,7 +26,7 @@ export function chiSquareQuantile(probability: number, degreesOfFreedom: number)
   return searchQuantile({
     probability,
     cumulative: (x) => chiSquareCumulative(x, degreesOfFreedom),
-    density: (x) => jStat.chisquare.pdf(x, degreesOfFreedom),
+    density: (x) => jstat.jStat.chisquare.pdf(x, degreesOfFreedom),
     start: degreesOfFreedom,
     least: 0,
     most: degreesOfFreedom + 100 * Math.sqrt(degreesOfFreedom) + 100,

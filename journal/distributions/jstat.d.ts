@@ -9,13 +9,17 @@ declare module 'jstat' {
     pdf(x: number, first: number, second: number): number;
     inv(probability: number, first: number, second: number): number;
   }
-  export const jStat: {
-    normal: TwoParameters;
-    chisquare: OneParameter;
-    studentt: OneParameter;
-    centralF: TwoParameters;
-    lowRegGamma(a: number, x: number): number;
-    gammaln(x: number): number;
-    ibeta(x: number, a: number, b: number): number;
+  /** Published as one CommonJS object, so that it is taken whole. */
+  const jstat: {
+    readonly jStat: {
+      normal: TwoParameters;
+      chisquare: OneParameter;
+      studentt: OneParameter;
+      centralF: TwoParameters;
+      lowRegGamma(a: number, x: number): number;
+      gammaln(x: number): number;
+      ibeta(x: number, a: number, b: number): number;
+    };
   };
+  export default jstat;
 }

@@ -1,4 +1,4 @@
-import { jStat } from 'jstat';
+import jstat from 'jstat';
 import { DomainError } from '@/journal/errors/domain-error';
 
 /**
@@ -12,6 +12,6 @@ import { DomainError } from '@/journal/errors/domain-error';
 export function studentCumulative(t: number, degreesOfFreedom: number): number {
   const isValid = degreesOfFreedom > 0 && degreesOfFreedom < Infinity;
   if (!isValid) throw new DomainError('degrees-of-freedom-invalid', { degreesOfFreedom });
-  const tail = 0.5 * jStat.ibeta(degreesOfFreedom / (degreesOfFreedom + t * t), degreesOfFreedom / 2, 0.5);
+  const tail = 0.5 * jstat.jStat.ibeta(degreesOfFreedom / (degreesOfFreedom + t * t), degreesOfFreedom / 2, 0.5);
   return t < 0 ? tail : 1 - tail;
 }

@@ -1,4 +1,8 @@
 declare module 'black-scholes' {
-  /** @param t years @param v volatility per square root of a year @param r continuous rate */
-  export function blackScholes(s: number, k: number, t: number, v: number, r: number, callPut: 'call' | 'put'): number;
+  /** Published as one CommonJS object, so that it is taken whole. */
+  const blackScholesPackage: {
+    /** @param t years @param v volatility per square root of a year @param r continuous rate */
+    readonly blackScholes: (s: number, k: number, t: number, v: number, r: number, callPut: 'call' | 'put') => number;
+  };
+  export default blackScholesPackage;
 }

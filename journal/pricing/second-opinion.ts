@@ -1,4 +1,4 @@
-import { blackScholes } from 'black-scholes';
+import blackScholesPackage from 'black-scholes';
 import { type EuropeanOption, europeanOptionPrice } from '@/journal/pricing/european-option';
 
 export interface SecondOpinion {
@@ -34,7 +34,7 @@ export function secondOpinion(option: EuropeanOption): SecondOpinion {
   // With no calendar time left but variance remaining, any year will do at a rate of 0.
   const years = option.years > 0 ? option.years : 1;
   const rate = option.years > 0 ? option.ratePerYear : 0;
-  const price = blackScholes(
+  const price = blackScholesPackage.blackScholes(
     presentSpot,
     option.strikePrice,
     years,

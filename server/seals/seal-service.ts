@@ -50,6 +50,7 @@ export class SealService {
       const { input } = reading;
       const forecast = forecastOrRefusal(input);
       refuseDisagreement(input, forecast);
+      refuseExpired(input, clock.now());
 
       const sealedAt = clock.now();
       const used = closes.filter(
@@ -91,6 +92,15 @@ function forecastOrRefusal(input: ForecastInput): Forecast {
     if (!(error instanceof DomainError)) throw error;
     throw new ApiFailure('plan-incomplete', 'The plan cannot be computed.', [planProblemOf(error)]);
   }
+}
+
+/** What has already settled is no forecast any more. */
+function refuseExpired({ legs, underlying }: ForecastInput, now: Date): void {
+  const session = usOptionsCalendar.sessionOn(legs[0]?.expirySessionDate ?? '');
+  const endsAt = underlying.settlementTime === 'am' ? session?.opensAt : session?.closesAt;
+  if (endsAt !== undefined && now.toISOString() < endsAt) return;
+  const message = 'The options have expired already. Choose a later expiry.';
+  throw new ApiFailure('plan-incomplete', message, [{ field: 'legs.0.expirySessionDate', message }]);
 }
 
 /** Each European leg is priced again by code that shares nothing with ours; beyond its known accuracy nothing is sealed. */
