@@ -229,7 +229,7 @@ describe.each(Object.entries(sizes))('the main job on a %s screen', (size, viewp
       .getByText(`+${profit.toFixed(2)}`)
       .first()
       .waitFor();
-    await page.getByText('Closed', { exact: true }).first().waitFor();
+    await page.getByRole('main').getByText('Closed', { exact: true }).first().waitFor();
   });
 
   step('shows expected against realised once the closes are there', async () => {
@@ -264,6 +264,7 @@ describe.each(Object.entries(sizes))('the main job on a %s screen', (size, viewp
     await page.getByText(`ZZIX long 1540 call: 1540 call in the money`).waitFor();
     await isClean();
     await page.goto(`${origin}/desk`);
+    await page.getByText('Members', { exact: true }).waitFor();
     await isClean();
     await page.getByRole('button', { name: 'Sign out' }).click();
     await page.getByRole('heading', { name: 'Sign in' }).waitFor();
