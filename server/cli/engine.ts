@@ -2,6 +2,7 @@ import { once } from 'node:events';
 import { createInterface } from 'node:readline';
 import { answerLine } from '@/server/cli/engine-commands/answer-line';
 import { type EngineCommand } from '@/server/cli/engine-commands/engine-command';
+import { forecastCommand } from '@/server/cli/engine-commands/forecast-command';
 import { impliedCommand } from '@/server/cli/engine-commands/implied-command';
 import { lotsCommand } from '@/server/cli/engine-commands/lots-command';
 import { oddsCommand } from '@/server/cli/engine-commands/odds-command';
@@ -16,6 +17,7 @@ const commands = new Map<string, EngineCommand>([
   ['implied', impliedCommand],
   ['volatility', volatilityCommand],
   ['odds', oddsCommand],
+  ['forecast', forecastCommand],
   ['symbol', symbolCommand],
   ['sessions', sessionsCommand],
   ['lots', lotsCommand],
