@@ -1,10 +1,15 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { MembershipEntity } from '@/server/people/membership-entity';
 import { idColumn, instantColumn } from '@/server/database/columns';
 
 /** Who did what, when; insert-only. */
 @Entity({ name: 'audit_event' })
 @Index('uq_audit_event_desk_id', ['deskId', 'id'], { unique: true })
 @Index('ix_audit_event_desk_at', ['deskId', 'at'])
+@ForeignKey(() => MembershipEntity, ['deskId', 'personId'], ['deskId', 'personId'], {
+  name: 'fk_audit_event_user_id',
+  onDelete: 'RESTRICT',
+})
 export class AuditEventEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

@@ -1,4 +1,6 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { MembershipEntity } from '@/server/people/membership-entity';
+import { UnderlyingEntity } from '@/server/underlyings/underlying-entity';
 import { idColumn, instantColumn } from '@/server/database/columns';
 import { type DraftPlan } from '@/shared/entries/draft-plan';
 import { type EntryState, type Strip } from '@/shared/entries/entry';
@@ -8,6 +10,14 @@ import { type EntryState, type Strip } from '@/shared/entries/entry';
 @Index('uq_entry_desk_id', ['deskId', 'id'], { unique: true })
 @Index('ix_entry_desk_trader', ['deskId', 'traderId', 'id'])
 @Index('ix_entry_desk_underlying', ['deskId', 'underlyingId', 'state'])
+@ForeignKey(() => MembershipEntity, ['deskId', 'traderId'], ['deskId', 'personId'], {
+  name: 'fk_entry_trader_id',
+  onDelete: 'RESTRICT',
+})
+@ForeignKey(() => UnderlyingEntity, ['deskId', 'underlyingId'], ['deskId', 'id'], {
+  name: 'fk_entry_underlying_id',
+  onDelete: 'RESTRICT',
+})
 export class EntryEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

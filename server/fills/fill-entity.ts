@@ -1,4 +1,5 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { EntryEntity } from '@/server/entries/entry-entity';
 import { idColumn, instantColumn } from '@/server/database/columns';
 import { type EntryFill } from '@/shared/entries/entry';
 
@@ -6,6 +7,12 @@ import { type EntryFill } from '@/shared/entries/entry';
 @Entity({ name: 'fill' })
 @Index('uq_fill_desk_id', ['deskId', 'id'], { unique: true })
 @Index('ix_fill_entry', ['deskId', 'entryId', 'tradedAt'])
+@Index('ix_fill_made_by', ['deskId', 'madeBy'])
+@ForeignKey(() => FillEntity, ['deskId', 'madeBy'], ['deskId', 'id'], { name: 'fk_fill_made_by', onDelete: 'RESTRICT' })
+@ForeignKey(() => EntryEntity, ['deskId', 'entryId'], ['deskId', 'id'], {
+  name: 'fk_fill_entry_id',
+  onDelete: 'RESTRICT',
+})
 export class FillEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

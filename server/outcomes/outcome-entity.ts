@@ -1,4 +1,5 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { EntryEntity } from '@/server/entries/entry-entity';
 import { idColumn, instantColumn } from '@/server/database/columns';
 import { type EntryOutcome } from '@/journal/outcome/entry-outcome';
 
@@ -6,6 +7,10 @@ import { type EntryOutcome } from '@/journal/outcome/entry-outcome';
 @Entity({ name: 'outcome' })
 @Index('uq_outcome_desk_id', ['deskId', 'id'], { unique: true })
 @Index('uq_outcome_entry', ['deskId', 'entryId'], { unique: true })
+@ForeignKey(() => EntryEntity, ['deskId', 'entryId'], ['deskId', 'id'], {
+  name: 'fk_outcome_entry_id',
+  onDelete: 'RESTRICT',
+})
 export class OutcomeEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

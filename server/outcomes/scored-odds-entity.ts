@@ -1,4 +1,6 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { EntryEntity } from '@/server/entries/entry-entity';
+import { MembershipEntity } from '@/server/people/membership-entity';
 import { idColumn } from '@/server/database/columns';
 
 /** One stated probability of a sealed forecast, with its answer once there is one: what scores are computed from. */
@@ -6,6 +8,14 @@ import { idColumn } from '@/server/database/columns';
 @Index('uq_scored_odds_desk_id', ['deskId', 'id'], { unique: true })
 @Index('uq_scored_odds_entry_key', ['deskId', 'entryId', 'oddsKey'], { unique: true })
 @Index('ix_scored_odds_trader', ['deskId', 'traderId', 'dueSessionDate'])
+@ForeignKey(() => EntryEntity, ['deskId', 'entryId'], ['deskId', 'id'], {
+  name: 'fk_scored_odds_entry_id',
+  onDelete: 'RESTRICT',
+})
+@ForeignKey(() => MembershipEntity, ['deskId', 'traderId'], ['deskId', 'personId'], {
+  name: 'fk_scored_odds_trader_id',
+  onDelete: 'RESTRICT',
+})
 export class ScoredOddsEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

@@ -1,4 +1,6 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { DeskEntity } from '@/server/desk/desk-entity';
+import { PersonEntity } from '@/server/people/person-entity';
 import { idColumn, instantColumn } from '@/server/database/columns';
 import { type Role } from '@/shared/contract/roles';
 
@@ -7,6 +9,8 @@ import { type Role } from '@/shared/contract/roles';
 @Index('uq_membership_desk_id', ['deskId', 'id'], { unique: true })
 @Index('uq_membership_desk_user', ['deskId', 'personId'], { unique: true })
 @Index('ix_membership_user', ['personId'])
+@ForeignKey(() => DeskEntity, ['deskId'], ['id'], { name: 'fk_membership_desk_id', onDelete: 'RESTRICT' })
+@ForeignKey(() => PersonEntity, ['personId'], ['id'], { name: 'fk_membership_user_id', onDelete: 'RESTRICT' })
 export class MembershipEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

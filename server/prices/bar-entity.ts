@@ -1,4 +1,5 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { UnderlyingEntity } from '@/server/underlyings/underlying-entity';
 import { idColumn, instantColumn } from '@/server/database/columns';
 import { type Bar } from '@/shared/underlyings/underlying';
 
@@ -8,6 +9,10 @@ const priceColumn = { type: 'decimal', precision: 30, scale: 12 } as const;
 @Entity({ name: 'bar' })
 @Index('uq_bar_desk_id', ['deskId', 'id'], { unique: true })
 @Index('uq_bar_session', ['deskId', 'underlyingId', 'sessionDate'], { unique: true })
+@ForeignKey(() => UnderlyingEntity, ['deskId', 'underlyingId'], ['deskId', 'id'], {
+  name: 'fk_bar_underlying_id',
+  onDelete: 'RESTRICT',
+})
 export class BarEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

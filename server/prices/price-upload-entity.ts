@@ -1,4 +1,6 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { UnderlyingEntity } from '@/server/underlyings/underlying-entity';
+import { MembershipEntity } from '@/server/people/membership-entity';
 import { idColumn, instantColumn } from '@/server/database/columns';
 import { type SettledReading } from '@/server/prices/reading/interpret-table';
 import { type PriceUpload } from '@/shared/prices/price-upload';
@@ -7,6 +9,14 @@ import { type PriceUpload } from '@/shared/prices/price-upload';
 @Entity({ name: 'price_upload' })
 @Index('uq_price_upload_desk_id', ['deskId', 'id'], { unique: true })
 @Index('ix_price_upload_desk_at', ['deskId', 'uploadedAt'])
+@ForeignKey(() => UnderlyingEntity, ['deskId', 'underlyingId'], ['deskId', 'id'], {
+  name: 'fk_price_upload_underlying_id',
+  onDelete: 'RESTRICT',
+})
+@ForeignKey(() => MembershipEntity, ['deskId', 'personId'], ['deskId', 'personId'], {
+  name: 'fk_price_upload_user_id',
+  onDelete: 'RESTRICT',
+})
 export class PriceUploadEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

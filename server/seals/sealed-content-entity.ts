@@ -1,10 +1,15 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { SealedForecastEntity } from '@/server/seals/sealed-forecast-entity';
 import { idColumn } from '@/server/database/columns';
 
 /** What a seal froze, apart from the chain, so that it can be erased one day while the chain still verifies. */
 @Entity({ name: 'sealed_content' })
 @Index('uq_sealed_content_desk_id', ['deskId', 'id'], { unique: true })
 @Index('uq_sealed_content_forecast', ['deskId', 'forecastId'], { unique: true })
+@ForeignKey(() => SealedForecastEntity, ['deskId', 'forecastId'], ['deskId', 'id'], {
+  name: 'fk_sealed_content_forecast_id',
+  onDelete: 'RESTRICT',
+})
 export class SealedContentEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

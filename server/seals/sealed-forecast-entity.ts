@@ -1,4 +1,6 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { EntryEntity } from '@/server/entries/entry-entity';
+import { MembershipEntity } from '@/server/people/membership-entity';
 import { digestColumn, idColumn } from '@/server/database/columns';
 
 /** One link of a trader's chain; the application can add links and change none. */
@@ -7,6 +9,14 @@ import { digestColumn, idColumn } from '@/server/database/columns';
 @Index('uq_sealed_forecast_sequence', ['deskId', 'traderId', 'sequence'], { unique: true })
 @Index('uq_sealed_forecast_previous', ['deskId', 'traderId', 'previousHash'], { unique: true })
 @Index('uq_sealed_forecast_entry', ['deskId', 'entryId'], { unique: true })
+@ForeignKey(() => EntryEntity, ['deskId', 'entryId'], ['deskId', 'id'], {
+  name: 'fk_sealed_forecast_entry_id',
+  onDelete: 'RESTRICT',
+})
+@ForeignKey(() => MembershipEntity, ['deskId', 'traderId'], ['deskId', 'personId'], {
+  name: 'fk_sealed_forecast_trader_id',
+  onDelete: 'RESTRICT',
+})
 export class SealedForecastEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

@@ -1,4 +1,5 @@
-import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
+import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm';
+import { DeskEntity } from '@/server/desk/desk-entity';
 import { idColumn, instantColumn } from '@/server/database/columns';
 import { type Underlying } from '@/shared/underlyings/underlying';
 
@@ -6,6 +7,7 @@ import { type Underlying } from '@/shared/underlyings/underlying';
 @Entity({ name: 'underlying' })
 @Index('uq_underlying_desk_id', ['deskId', 'id'], { unique: true })
 @Index('uq_underlying_desk_symbol', ['deskId', 'symbol'], { unique: true })
+@ForeignKey(() => DeskEntity, ['deskId'], ['id'], { name: 'fk_underlying_desk_id', onDelete: 'RESTRICT' })
 export class UnderlyingEntity {
   @PrimaryColumn(idColumn('id')) id!: string;
   @Column(idColumn('desk_id')) deskId!: string;

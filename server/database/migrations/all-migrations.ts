@@ -20,6 +20,7 @@ import { KeepSealedForecastFromDelete } from '@/server/database/migrations/0019-
 import { KeepAuditEventFromUpdate } from '@/server/database/migrations/0020-keep-audit-event-from-update';
 import { KeepAuditEventFromDelete } from '@/server/database/migrations/0021-keep-audit-event-from-delete';
 import { KeepSealedContentFromUpdate } from '@/server/database/migrations/0022-keep-sealed-content-from-update';
+import { TieSharesToTheirExercise } from '@/server/database/migrations/0023-tie-shares-to-their-exercise';
 
 /** In the order they are applied; a new one goes to the end. */
 export const migrations = [
@@ -45,4 +46,5 @@ export const migrations = [
   KeepAuditEventFromUpdate,
   KeepAuditEventFromDelete,
   KeepSealedContentFromUpdate,
+  TieSharesToTheirExercise,
 ];
