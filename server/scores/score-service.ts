@@ -1,6 +1,5 @@
-import { meanBrierScore } from '@/journal/scoring/brier-score';
+import { meanBrierScore, brierScore } from '@/journal/scoring/brier-score';
 import { scoringSummary } from '@/journal/scoring/scoring-summary';
-import { brierScore } from '@/journal/scoring/brier-score';
 import { type DeskScope } from '@/server/database/desk-scope';
 import { EntryStore } from '@/server/entries/entry-store';
 import { EntryEntity } from '@/server/entries/entry-entity';
