@@ -1,4 +1,5 @@
 import { AuditLog } from '@/server/database/audit-log';
+import { isDuplicate } from '@/server/database/transaction';
 import { type DeskScope } from '@/server/database/desk-scope';
 import { draftSummary } from '@/server/entries/draft-summary';
 import { type EntryDescriber } from '@/server/entries/describe-entry';
@@ -42,8 +43,19 @@ export class EntryService {
     return this.dependencies.describer.entry(scope, entry);
   }
 
-  /** Starts a draft; the same id again gives the draft that is there. */
-  create(scope: DeskScope, { id, plan }: { id: string; plan: DraftPlan }): Promise<Entry> {
+  /** Starts a draft; the same id again gives the draft that is there, also when both requests come at once. */
+  async create(scope: DeskScope, { id, plan }: { id: string; plan: DraftPlan }): Promise<Entry> {
+    try {
+      return await this.insert(scope, { id, plan });
+    } catch (error) {
+      if (!isDuplicate(error)) throw error;
+      const known = await new EntryStore(scope).findOwn(id);
+      if (known === null) throw new ConflictError('already-exists', 'Another entry has this id.');
+      return this.describe(scope, known);
+    }
+  }
+
+  private insert(scope: DeskScope, { id, plan }: { id: string; plan: DraftPlan }): Promise<Entry> {
     return scope.inTransaction(async (inner) => {
       const entries = new EntryStore(inner);
       const known = await entries.findOwn(id);

@@ -3,6 +3,7 @@ import { type Fill } from '@/journal/fills/fill';
 import { isFlat, openPositions } from '@/journal/fills/position';
 import { sharesFromExercise } from '@/journal/fills/underlying-shares';
 import { AuditLog } from '@/server/database/audit-log';
+import { isDuplicate } from '@/server/database/transaction';
 import { type DeskScope } from '@/server/database/desk-scope';
 import { type EntryEntity } from '@/server/entries/entry-entity';
 import { EntryStore } from '@/server/entries/entry-store';
@@ -22,6 +23,11 @@ interface Dependencies {
   readonly ids: Ids;
   readonly outcomes: OutcomeService;
 }
+interface FillAddition {
+  readonly entryId: string;
+  readonly fill: NewFill;
+  readonly requestId: string;
+}
 const MOST_AHEAD_MS = 24 * 3_600_000;
 
 /** Fills typed by hand: they move an entry from sealed to open to closed. */
@@ -29,10 +35,16 @@ export class FillService {
   constructor(private readonly dependencies: Dependencies) {}
 
   /** Adds a fill; the same id again gives the entry as it is. */
-  add(
-    scope: DeskScope,
-    { entryId, fill, requestId }: { entryId: string; fill: NewFill; requestId: string },
-  ): Promise<EntryEntity> {
+  async add(scope: DeskScope, addition: FillAddition): Promise<EntryEntity> {
+    try {
+      return await this.insert(scope, addition);
+    } catch (error) {
+      // A fill of this entry would have been found under the entry's lock, so the id is taken elsewhere.
+      throw isDuplicate(error) ? new ConflictError('already-exists', 'Another fill has this id.') : error;
+    }
+  }
+
+  private insert(scope: DeskScope, { entryId, fill, requestId }: FillAddition): Promise<EntryEntity> {
     return scope.inTransaction(async (inner) => {
       const entries = new EntryStore(inner);
       const entry = await entries.getOwn(entryId, { locked: true });

@@ -43,8 +43,9 @@ async function removeFile(request: Request): Promise<void> {
 }
 
 function asFailure(error: unknown): unknown {
-  if (!(error instanceof MulterError)) return error;
-  return error.code === 'LIMIT_FILE_SIZE'
+  // The parser's own errors (a body that ends half way) carry no code; those of the disk do.
+  if (!(error instanceof MulterError) && (!(error instanceof Error) || 'code' in error)) return error;
+  return error instanceof MulterError && error.code === 'LIMIT_FILE_SIZE'
     ? new ApiFailure('too-large', `The file is larger than ${priceFileLimits.bytes / 1024 / 1024} MB.`)
     : new ApiFailure('request-malformed', 'Send exactly one file in the part "file".');
 }

@@ -25,7 +25,7 @@ const listQuery = z.strictObject({
   /** Words in symbol, structure, idea or tags. */
   search: z.string().max(120).optional(),
   /** The `next` of the page before. */
-  after: z.string().max(120).optional(),
+  after: idSchema.optional(),
   limit: z.coerce.number().int().min(1).max(200).default(50),
 });
 
