@@ -1,6 +1,7 @@
 // Verifies every seal chain of the database: `npm run verify`. Reads DATABASE_URL, else the development database.
-import { readFileSync } from 'node:fs';
-import mariadb from 'mariadb';
+import { existsSync, readFileSync } from 'node:fs';
+import { inRoot } from './places.mjs';
+import { createConnection } from 'mariadb';
 import { verifyChain } from './verify-chain.mjs';
 
 const query = `
@@ -9,8 +10,13 @@ const query = `
     FROM sealed_forecast f LEFT JOIN sealed_content c ON c.desk_id = f.desk_id AND c.forecast_id = f.id
    ORDER BY f.desk_id, f.trader_id, f.sequence`;
 
-const url = new URL(process.env.DATABASE_URL ?? readFileSync('var/main/database-url', 'utf8').trim());
-const connection = await mariadb.createConnection({
+const developmentUrl = inRoot('var/main/database-url');
+if (process.env.DATABASE_URL === undefined && !existsSync(developmentUrl)) {
+  console.error('There is no database to verify: set DATABASE_URL, or let `npm start` make the development database.');
+  process.exit(2);
+}
+const url = new URL(process.env.DATABASE_URL ?? readFileSync(developmentUrl, 'utf8').trim());
+const connection = await createConnection({
   host: url.hostname,
   port: Number(url.port || 3306),
   user: decodeURIComponent(url.username),

@@ -1,4 +1,4 @@
-import { useRef, useState } from 'react';
+import { useState } from 'react';
 import { View } from 'react-native';
 import { Controller, useForm, useWatch } from 'react-hook-form';
 import { uuidv7 } from 'uuidv7';
@@ -14,7 +14,7 @@ import { useMe } from '@/hooks/account/use-me';
 import { ApiError } from '@/hooks/client/api-error';
 import { systemClock } from '@/hooks/client/clock';
 import { useAddFill } from '@/hooks/entries/use-entries';
-import { fillKinds } from '@/shared/entries/entry';
+import { type fillKinds } from '@/shared/entries/entry';
 import { newFillForm, readFillForm, type FillForm } from '@/shared/entries/fill-form';
 
 const kindOptions: readonly { value: (typeof fillKinds)[number]; label: string }[] = [
@@ -34,14 +34,14 @@ export function AddFillDialog({ entry, onClose }: { entry: SealedEntry; onClose:
   const [problems, setProblems] = useState<readonly { field: string; message: string }[]>([]);
   const add = useAddFill();
   // The same id until it is stored: a second press or a lost answer never makes two fills.
-  const fillId = useRef(uuidv7());
+  const [fillId] = useState(uuidv7);
   const kind = useWatch({ control: form.control, name: 'kind' });
   const isShares = useWatch({ control: form.control, name: 'contract' }) === 'shares';
   const { underlying } = entry.sealed.input;
 
   const problemOf = (field: string) => problems.find((problem) => problem.field === field)?.message;
   const submit = form.handleSubmit((values) => {
-    const reading = readFillForm(values, { id: fillId.current, input: entry.sealed.input });
+    const reading = readFillForm(values, { id: fillId, input: entry.sealed.input });
     if (reading.kind === 'incomplete') {
       setProblems(reading.problems);
       return;

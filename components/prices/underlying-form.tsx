@@ -1,4 +1,4 @@
-import { useRef, useState } from 'react';
+import { useState } from 'react';
 import { View } from 'react-native';
 import { Controller, useForm, type Control } from 'react-hook-form';
 import { uuidv7 } from 'uuidv7';
@@ -30,7 +30,7 @@ const fieldsSchema = z.strictObject(underlyingFields);
 
 /** What the product must know of an underlying: how it is named, exercised, settled and counted. */
 export function UnderlyingForm({ initial, submitLabel, isBusy, error, onSubmit }: Props) {
-  const id = useRef(uuidv7());
+  const [id] = useState(uuidv7);
   const [problems, setProblems] = useState<Readonly<Record<string, string>>>({});
   const { dividendYield, ...rest } = initial;
   const { control, handleSubmit } = useForm<Typed>({
@@ -47,7 +47,7 @@ export function UnderlyingForm({ initial, submitLabel, isBusy, error, onSubmit }
     const parsed = fieldsSchema.safeParse(values);
     if (parsed.success) {
       setProblems({});
-      onSubmit(parsed.data, id.current);
+      onSubmit(parsed.data, id);
       return;
     }
     setProblems(

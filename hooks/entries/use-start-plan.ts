@@ -1,4 +1,4 @@
-import { useRef } from 'react';
+import { useState } from 'react';
 import { uuidv7 } from 'uuidv7';
 import { useMe } from '@/hooks/account/use-me';
 import { useCreateEntry } from '@/hooks/entries/use-entries';
@@ -9,12 +9,12 @@ export function useStartPlan(onStarted: (entryId: string) => void) {
   const { data: me } = useMe();
   const create = useCreateEntry();
   // One id for this visit: pressing twice or trying again after a lost answer makes one draft.
-  const entryId = useRef(uuidv7());
+  const [entryId] = useState(uuidv7);
   const start = (underlyingId: string) => {
     if (me === undefined || me === null || create.isPending) return;
     create.mutate(
-      { body: { id: entryId.current, plan: newDraftPlan(underlyingId, me.desk.settings) } },
-      { onSuccess: () => onStarted(entryId.current) },
+      { body: { id: entryId, plan: newDraftPlan(underlyingId, me.desk.settings) } },
+      { onSuccess: () => onStarted(entryId) },
     );
   };
   return { start, isPending: create.isPending, error: create.error, reset: create.reset };
