@@ -3,12 +3,14 @@ import express, { type Express } from 'express';
 import session from 'express-session';
 import helmet from 'helmet';
 import { pinoHttp } from 'pino-http';
+import { ApiFailure } from '@/server/errors/api-failure';
 import { assignRequestId, requestIdOf } from '@/server/http/request-id';
 import { errorHandler } from '@/server/http/error-handler';
 import { forgeryGuard } from '@/server/http/forgery-guard';
 import { healthRouter, type Readiness } from '@/server/http/health';
 import { mountEndpoints } from '@/server/http/mount-endpoints';
 import { openApiDocument } from '@/server/http/openapi';
+import { factsOf } from '@/server/http/request-facts';
 import { secureOnLoopback } from '@/server/http/secure-on-loopback';
 import { webClient } from '@/server/http/web-client';
 import { sessionLimits } from '@/server/account/session-store';
@@ -69,6 +71,7 @@ export function createApp(surroundings: Surroundings & { readonly logger: Logger
     }),
   );
   app.use(webClient(configuration.WEB_ROOT));
+  app.use((_, __, next) => next(new ApiFailure('not-found', 'There is no such address.')));
   app.use(errorHandler(logger));
   return { app, readiness, close: services.close };
 }
@@ -113,6 +116,8 @@ function requestLog(logger: Logger) {
       res: ({ statusCode }: { statusCode: number }) => ({ status: statusCode }),
       err: () => undefined, // the error handler logs what is worth it
     },
+    customSuccessObject: (request, _, line: object) => ({ ...line, ...factsOf(request) }),
+    customErrorObject: (request, _, __, line: object) => ({ ...line, ...factsOf(request) }),
     autoLogging: { ignore: (request) => !request.url?.startsWith(apiRoot) },
   });
 }

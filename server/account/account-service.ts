@@ -36,7 +36,7 @@ export class AccountService {
   /** An account with a desk of one, of which its person is the lead. */
   async signUp(person: NewPerson): Promise<PersonEntity> {
     if (!this.dependencies.isSignUpOpen) throw new ForbiddenError('Accounts are made by invitation here.');
-    return this.makePerson(person, `Desk of ${person.displayName}`);
+    return this.makePerson(person, deskNameFor(person.displayName));
   }
 
   /** The first lead of a fresh installation; the token works once and for 24 hours. */
@@ -129,4 +129,11 @@ export class AccountService {
     }
     return row;
   }
+}
+
+const LONGEST_DESK_NAME = 120;
+
+/** Named after its person, as far as their name fits. */
+function deskNameFor(displayName: string): string {
+  return [...`Desk of ${displayName}`].slice(0, LONGEST_DESK_NAME).join('');
 }

@@ -30,8 +30,12 @@ export class SessionStore extends Store {
     settle(this.write(id, session), done);
   }
 
-  override touch(id: string, session: SessionData, done: Done<void> = () => undefined): void {
-    settle(this.write(id, session), done);
+  /** Only the end moves: the content a request read may be older than what another has written since. */
+  override touch(id: string, _: SessionData, done: Done<void> = () => undefined): void {
+    settle(
+      this.prolong(id).then(() => undefined),
+      done,
+    );
   }
 
   override destroy(id: string, done: Done<void> = () => undefined): void {
@@ -56,32 +60,41 @@ export class SessionStore extends Store {
   }
 
   private async write(id: string, session: SessionData): Promise<void> {
-    const now = this.clock.now();
     const digest = secretDigest(id);
     const content = JSON.stringify(session);
     const personId = session.passport?.user.personId ?? null;
-    const idleEnd = new Date(now.getTime() + sessionLimits.idleMs);
-    const absolute = new Date(now.getTime() + sessionLimits.absoluteMs);
-    const endsAt = idleEnd < absolute ? idleEnd : absolute;
     // Two steps instead of an upsert: the update leaves tombstones alone, the insert is ignored where one lies.
-    const updated = await this.rows()
-      .createQueryBuilder()
-      .update()
-      .set({
-        content,
-        personId,
-        endsAt: () => 'LEAST(:idleEnd, TIMESTAMPADD(SECOND, :absoluteSeconds, started_at))',
-      })
-      .where('digest = :digest AND ended_at IS NULL')
-      .setParameters({ digest, idleEnd, absoluteSeconds: sessionLimits.absoluteMs / 1000 })
-      .execute();
-    if (updated.affected !== 0) return;
+    if (await this.prolong(id, { content, personId })) return;
+    const startedAt = this.clock.now();
     await this.rows()
       .createQueryBuilder()
       .insert()
       .orIgnore()
-      .values({ digest, personId, content, startedAt: now, endsAt, endedAt: null })
+      .values({ digest, personId, content, startedAt, endsAt: this.idleEnd(), endedAt: null })
       .execute();
+  }
+
+  /** Moves the end of a living session, never beyond seven days from its start; gives whether there was one. */
+  private async prolong(
+    id: string,
+    changes: Partial<Pick<SessionEntity, 'content' | 'personId'>> = {},
+  ): Promise<boolean> {
+    const updated = await this.rows()
+      .createQueryBuilder()
+      .update()
+      .set({ ...changes, endsAt: () => 'LEAST(:idleEnd, TIMESTAMPADD(SECOND, :absoluteSeconds, started_at))' })
+      .where('digest = :digest AND ended_at IS NULL')
+      .setParameters({
+        digest: secretDigest(id),
+        idleEnd: this.idleEnd(),
+        absoluteSeconds: sessionLimits.absoluteMs / 1000,
+      })
+      .execute();
+    return updated.affected !== 0;
+  }
+
+  private idleEnd(): Date {
+    return new Date(this.clock.now().getTime() + sessionLimits.idleMs);
   }
 
   private async end(id: string): Promise<void> {

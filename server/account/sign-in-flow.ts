@@ -57,6 +57,7 @@ export class SignInFlow {
   }
 
   signOut(request: Request): Promise<void> {
+    request.res?.set('Clear-Site-Data', '"cache"'); // what was shown must not come back with the Back button
     return new Promise((resolve, reject) => {
       request.session.destroy((error: unknown) =>
         error === null || error === undefined ? resolve() : reject(asError(error)),

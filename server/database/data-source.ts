@@ -4,6 +4,7 @@ import { InvitationEntity } from '@/server/account/invitation-entity';
 import { LoginThrottleEntity } from '@/server/account/login-throttle-entity';
 import { SessionEntity } from '@/server/account/session-entity';
 import { AuditEventEntity } from '@/server/database/audit-event-entity';
+import { boundedDriver } from '@/server/database/pool';
 import { migrations } from '@/server/database/migrations/all-migrations';
 import { DeskEntity } from '@/server/desk/desk-entity';
 import { EntryEntity } from '@/server/entries/entry-entity';
@@ -25,6 +26,7 @@ const POOL_SIZE = 10;
 export function createDataSource(url: string): DataSource {
   return new DataSource({
     type: 'mariadb',
+    driver: boundedDriver,
     url,
     timezone: 'Z',
     dateStrings: ['DATE'],

@@ -1,6 +1,8 @@
 import { type ErrorRequestHandler } from 'express';
 import { ZodError } from 'zod';
 import { ApiFailure } from '@/server/errors/api-failure';
+import { describeFailure } from '@/server/database/describe-failure';
+import { isDatabaseUnavailable } from '@/server/database/database-unavailable';
 import { type Logger } from '@/server/runtime/logger';
 import { apiErrors, type ApiErrorBody, type ApiErrorCode } from '@/shared/contract/error-codes';
 import { requestIdOf } from '@/server/http/request-id';
@@ -17,7 +19,7 @@ export function errorHandler(logger: Logger): ErrorRequestHandler {
     const failure = asFailure(error);
     const requestId = requestIdOf(request);
     const { status, action } = apiErrors[failure.code];
-    if (status >= 500) logger.error({ requestId, error: describe(error) }, 'request failed');
+    if (status >= 500) logger.error({ requestId, error: describeFailure(error) }, 'request failed');
     if (status === 429 || status === 503) response.set('Retry-After', RETRY_SECONDS);
     const body: ApiErrorBody = {
       error: {
@@ -37,6 +39,7 @@ function asFailure(error: unknown): ApiFailure {
   if (error instanceof ApiFailure) return error;
   if (error instanceof ZodError)
     return new ApiFailure('input-invalid', 'Some fields need correcting.', problemsOf(error));
+  if (isDatabaseUnavailable(error)) return new ApiFailure('unavailable', 'The database is busy or out of reach.');
   const code = codeOfFramework(error);
   if (code !== null) return new ApiFailure(code, frameworkMessages[code]);
   return new ApiFailure('internal', 'Something went wrong on our side.');
@@ -65,10 +68,4 @@ function codeOfFramework(error: unknown): keyof typeof frameworkMessages | null 
   if (error.status === 413) return 'too-large';
   if (error.status === 415) return 'content-type-refused';
   return typeof error.status === 'number' && error.status >= 400 && error.status < 500 ? 'request-malformed' : null;
-}
-
-function describe(error: unknown): Record<string, unknown> {
-  return error instanceof Error
-    ? { name: error.name, message: error.message, stack: error.stack }
-    : { value: String(error) };
 }

@@ -5,6 +5,7 @@ import { ApiFailure } from '@/server/errors/api-failure';
 import { ForbiddenError } from '@/server/errors/forbidden-error';
 import { readBody } from '@/server/http/read-body';
 import { fileOf, receiveFile } from '@/server/http/receive-file';
+import { noteFacts } from '@/server/http/request-facts';
 import { requestIdOf } from '@/server/http/request-id';
 import { type PersonEntity } from '@/server/people/person-entity';
 import { type Endpoint } from '@/shared/contract/define-endpoint';
@@ -67,8 +68,9 @@ interface Admitted {
 const admitted = new WeakMap<Request, Admitted>();
 
 /** Lets in who may call, by what the database says now; everyone else is refused before anything is read. */
-function admit({ me, signedInPerson }: Mounting, { access }: Endpoint): RequestHandler {
+function admit({ me, signedInPerson }: Mounting, { name, access }: Endpoint): RequestHandler {
   return async (request: Request, _: Response, next: NextFunction) => {
+    noteFacts(request, { endpoint: name });
     if (access.kind === 'public') {
       admitted.set(request, {});
       next();
@@ -76,6 +78,7 @@ function admit({ me, signedInPerson }: Mounting, { access }: Endpoint): RequestH
     }
     const person = await signedInPerson(request);
     if (person === null) throw new ApiFailure('not-signed-in', 'You are not signed in, or your session has ended.');
+    noteFacts(request, { personId: person.id });
     if (access.kind === 'signedIn') {
       admitted.set(request, { person });
       next();
@@ -83,6 +86,7 @@ function admit({ me, signedInPerson }: Mounting, { access }: Endpoint): RequestH
     }
     const place = await me.placeOf(person.id, request.session.deskId);
     if (place === null) throw new ForbiddenError('You are on no desk.');
+    noteFacts(request, { deskId: place.deskId });
     if (!access.roles.includes(place.role)) throw new ForbiddenError();
     admitted.set(request, { person, scope: me.scopeFor(person, place) });
     next();

@@ -1,8 +1,10 @@
 import { type Server } from 'node:http';
+import { describeFailure } from '@/server/database/describe-failure';
 import { type Readiness } from '@/server/http/health';
 import { type Logger } from '@/server/runtime/logger';
 
 const GRACE_MS = 10_000;
+const SWEEP_MS = 50;
 
 interface Lifecycle {
   readonly server: Server;
@@ -22,10 +24,13 @@ export function superviseProcess({ server, readiness, logger, close }: Lifecycle
     if (isStopping) process.exit(1);
     isStopping = true;
     readiness.isAccepting = false;
+    // Browsers keep connections open for later: each is closed as soon as its last answer is out.
+    server.prependListener('request', (_, response) => response.setHeader('Connection', 'close'));
     const closed = new Promise<void>((resolve) => server.close(() => resolve()));
-    server.closeIdleConnections();
+    const sweep = setInterval(() => server.closeIdleConnections(), SWEEP_MS);
     const cut = setTimeout(() => server.closeAllConnections(), GRACE_MS);
     await closed;
+    clearInterval(sweep);
     clearTimeout(cut);
     await close();
     logger.info('stopped');
@@ -35,13 +40,7 @@ export function superviseProcess({ server, readiness, logger, close }: Lifecycle
   process.on('SIGINT', () => void stop(0));
   for (const event of ['uncaughtException', 'unhandledRejection'] as const) {
     process.on(event, (error: unknown) => {
-      logger.fatal(
-        {
-          error:
-            error instanceof Error ? { name: error.name, message: error.message, stack: error.stack } : String(error),
-        },
-        event,
-      );
+      logger.fatal({ error: describeFailure(error) }, event);
       process.exit(1);
     });
   }
