@@ -16,7 +16,6 @@ import { EntryService } from '@/server/entries/entry-service';
 import { FillService } from '@/server/fills/fill-service';
 import { OutcomeService } from '@/server/outcomes/outcome-service';
 import { type HandlersOf } from '@/server/http/handler';
-import { PeopleNames } from '@/server/people/people-names';
 import { PeopleStore } from '@/server/people/people-store';
 import { priceUploadHandlers } from '@/server/prices/price-upload-handlers';
 import { type Clock } from '@/server/runtime/clock';
@@ -58,7 +57,7 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
   const onBarsChanged = outcomes.onBarsChanged.bind(outcomes);
   const underlyings = new UnderlyingService({ clock });
 
-  const describer = new EntryDescriber(new PeopleNames(desks));
+  const describer = new EntryDescriber();
   const entries = new EntryService({ clock, ids, describer });
   const seals = new SealService({ clock, ids, outcomes });
   const fills = new FillService({ clock, ids, outcomes });

@@ -4,20 +4,18 @@ import { type DeskScope } from '@/server/database/desk-scope';
 import { type EntryEntity } from '@/server/entries/entry-entity';
 import { FillStore } from '@/server/fills/fill-store';
 import { OutcomeEntity } from '@/server/outcomes/outcome-entity';
-import { type PeopleNames } from '@/server/people/people-names';
+import { namesOnDesk } from '@/server/people/people-names';
 import { SealStore } from '@/server/seals/seal-store';
 import { UnderlyingStore } from '@/server/underlyings/underlying-store';
 import { type Entry, type EntryRow } from '@/shared/entries/entry';
 
 /** Entries as readers see them: names beside ids, seals, fills with their cash, outcomes. */
 export class EntryDescriber {
-  constructor(private readonly names: PeopleNames) {}
-
   async rows(scope: DeskScope, entries: readonly EntryEntity[]): Promise<EntryRow[]> {
     const underlyings = new Map(
       (await new UnderlyingStore(scope).list()).map((underlying) => [underlying.id, underlying]),
     );
-    const names = await this.names.of(scope.deskId);
+    const names = await namesOnDesk(scope);
     return entries.map((entry) => {
       const underlying = underlyings.get(entry.underlyingId);
       return {

@@ -38,6 +38,8 @@ export class SealService {
   seal(scope: DeskScope, { entryId, version, requestId }: SealRequest): Promise<EntryEntity> {
     const { clock, ids, outcomes } = this.dependencies;
     return scope.inTransaction(async (inner) => {
+      const seals = new SealStore(inner);
+      await seals.awaitTurn(inner.actor.personId);
       const entries = new EntryStore(inner);
       const entry = await entries.getOwn(entryId, { locked: true });
       assertDraft(entry);
@@ -57,7 +59,7 @@ export class SealService {
         ({ sessionDate }) =>
           input.volatility.lastSessionDate !== null && sessionDate <= input.volatility.lastSessionDate,
       );
-      await new SealStore(inner).append({
+      await seals.append({
         forecastId: ids.next(),
         contentId: ids.next(),
         traderId: entry.traderId,

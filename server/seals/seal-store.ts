@@ -29,10 +29,16 @@ export class SealStore {
     return this.scope.repository(SealedForecastEntity);
   }
 
-  /** Adds the next link of the trader's chain, computed from what the database then holds. Needs a transaction. */
+  /**
+   * Waits until no other seal of the trader is being made; their membership is the lock that exists before the first link does.
+   * It must be the first statement of the transaction: what is read before it may be older than the last link.
+   */
+  async awaitTurn(traderId: string): Promise<void> {
+    await this.scope.repository(MembershipEntity).find({ personId: traderId }, { locked: true });
+  }
+
+  /** Adds the next link of the trader's chain, computed from what the database then holds; the turn must be the caller's. */
   async append(seal: NewSeal): Promise<SealedForecastEntity> {
-    // One seal of a trader at a time: their membership is the lock that exists before the first link does.
-    await this.scope.repository(MembershipEntity).find({ personId: seal.traderId }, { locked: true });
     const [last] = await this.links.find({ traderId: seal.traderId }, { order: { sequence: 'DESC' }, take: 1 });
     const place = {
       deskId: this.scope.deskId,

@@ -162,11 +162,11 @@ describe('money', () => {
 });
 
 describe('text that databases and formats stumble over', () => {
-  it.each(['ü', '\u0000', '\ud800', '%_\\', "' OR ''='", '🜁', 'a'.repeat(119)])(
+  it.each(['ü', '\u0000', '\ufffd', '%_\\', "' OR ''='", '🜁', 'a'.repeat(119)])(
     'is searched for, filtered by and paged after without failure: %j',
     async (text) => {
       for (const key of ['search', 'tag', 'after']) {
-        const value = encodeURIComponent(text.toWellFormed()).slice(0, 119);
+        const value = encodeURIComponent(text).slice(0, 119);
         const answer = await owner.get(`/entries?${key}=${value}`);
         expect([key, answer.status >= 500]).toEqual([key, false]);
       }
