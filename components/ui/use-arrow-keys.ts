@@ -37,5 +37,7 @@ function targetOf(key: string, { count, current, isOpen }: Place): number | null
   const step = steps[key];
   if (step === undefined || open.length === 0) return null;
   const place = open.indexOf(current);
+  // With nothing chosen yet, forwards begins at the first and backwards at the last.
+  if (place < 0) return step > 0 ? (open[0] ?? null) : (open.at(-1) ?? null);
   return open[(place + step + open.length) % open.length] ?? null;
 }
