@@ -1,0 +1,32 @@
+import { logReturns } from '@/journal/returns/log-returns';
+import { closeDailyVolatility } from '@/journal/volatility/close-daily-volatility';
+import { estimateVolatility } from '@/journal/volatility/estimate-volatility';
+import { ewmaDailyVolatility } from '@/journal/volatility/ewma-daily-volatility';
+import reference from '@/tests/reference/data/window_vol.json';
+import { indexCloses } from '@/tests/reference/index-closes';
+import { expectWithin } from '@/tests/reference/reference-file';
+
+const RELATIVE = 1e-11; // as the file states
+const cases = reference.groups.flatMap((group) => group.cases);
+const near = (actual: number, expected: number) => expectWithin(actual, expected, RELATIVE * expected);
+
+describe.each(cases)('daily volatility of $series at session $session (R 4.2.2, TTR 0.24.3)', (one) => {
+  const closes = indexCloses(one.series).slice(0, one.session);
+  const returns = logReturns(closes);
+
+  it.each(Object.entries(one.sd))('has the sample deviation of the last %s returns', (window, expected) => {
+    near(estimateVolatility(closes, { kind: 'window', window: Number(window) }).dailyVolatility, expected);
+  });
+
+  it.each(Object.entries(one.rms))('has the zero-mean deviation of the last %s returns', (window, expected) => {
+    near(closeDailyVolatility(returns.slice(-Number(window)), { mean: 'zero' }), expected);
+  });
+
+  it('has the weighted volatility started at the first squared return', () => {
+    near(estimateVolatility(closes, { kind: 'ewma', lambda: 0.94 }).dailyVolatility, one.ewma_first);
+  });
+
+  it('has the weighted volatility started at the mean of 21 squared returns', () => {
+    near(ewmaDailyVolatility(returns, { lambda: 0.94, seedReturns: 21 }), one.ewma_seed21);
+  });
+});
