@@ -13,7 +13,7 @@ const settings = z.strictObject({
   /** Scheme and host under which browsers reach the server; https in production. */
   PUBLIC_ORIGIN: z
     .url({ protocol: /^https?$/ })
-    .refine((text) => new URL(text).origin === text, 'must be an origin without a path'),
+    .refine((text) => URL.canParse(text) && new URL(text).origin === text, 'must be an origin without a path'),
   DATABASE_URL: databaseUrl,
   SESSION_SECRET: secret,
   PASSWORD_PEPPER: secret,
