@@ -29,9 +29,12 @@ function isWorthRepeating(error: unknown): boolean {
   return 'errno' in driverError && typeof driverError.errno === 'number' && worthRepeating.has(driverError.errno);
 }
 
-/** Milliseconds before the next try, apart for each process so that two do not meet again. */
+let pauses = 0;
+
+/** Milliseconds before the next try, apart for each process and each pause so that two do not meet again. */
 function spread(attempt: number): number {
-  return attempt * 10 + (process.pid % 17) + ((attempt * 7) % 11);
+  pauses += 1;
+  return attempt * 10 + (process.pid % 17) + ((pauses * 37) % 61);
 }
 
 /** Whether an insert met a row that is already there. */

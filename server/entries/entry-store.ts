@@ -80,12 +80,14 @@ export class EntryStore {
     return query.orderBy('entry.id', 'DESC').take(limit).getMany();
   }
 
-  /** Sealed, open and closed entries on an underlying: those a new bar can say something about. */
-  listSealedOn(underlyingId: string): Promise<EntryEntity[]> {
+  /** Sealed, open and closed entries on an underlying, held: those a new bar can say something about. */
+  holdSealedOn(underlyingId: string): Promise<EntryEntity[]> {
     return this.rows
       .query('entry')
       .andWhere('entry.underlyingId = :underlyingId', { underlyingId })
       .andWhere("entry.state <> 'draft'")
+      .orderBy('entry.id')
+      .setLock('pessimistic_write')
       .getMany();
   }
 

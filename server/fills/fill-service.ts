@@ -12,6 +12,7 @@ import { ConflictError } from '@/server/errors/conflict-error';
 import { NotFoundError } from '@/server/errors/not-found-error';
 import { fillProblemOf } from '@/server/fills/fill-problem';
 import { FillStore } from '@/server/fills/fill-store';
+import { refuseUnkeepable } from '@/server/fills/refuse-unkeepable';
 import { type OutcomeService } from '@/server/outcomes/outcome-service';
 import { type Clock } from '@/server/runtime/clock';
 import { type Ids } from '@/server/runtime/ids';
@@ -62,7 +63,9 @@ export class FillService {
       const before = await store.list(entryId);
       const sequence = before.reduce((last, { fill: { sequence: own } }) => Math.max(last, own), 0) + 1;
       const added = await this.withShares(inner, entry, { ...fill, sequence });
-      assertPossible([...before.map(({ fill: stored }) => stored), ...added.map(({ fill: made }) => made)]);
+      const together = [...before.map(({ fill: stored }) => stored), ...added.map(({ fill: made }) => made)];
+      assertPossible(together);
+      refuseUnkeepable(together);
       const addedAt = this.dependencies.clock.now();
       await store.insert(
         added.map(({ fill: { tradedAt, ...made }, madeBy }) => ({

@@ -1,5 +1,4 @@
 import { type ErrorRequestHandler } from 'express';
-import { ZodError } from 'zod';
 import { ApiFailure } from '@/server/errors/api-failure';
 import { describeFailure } from '@/server/database/describe-failure';
 import { isDatabaseUnavailable } from '@/server/database/database-unavailable';
@@ -37,23 +36,10 @@ export function errorHandler(logger: Logger): ErrorRequestHandler {
 
 function asFailure(error: unknown): ApiFailure {
   if (error instanceof ApiFailure) return error;
-  if (error instanceof ZodError)
-    return new ApiFailure('input-invalid', 'Some fields need correcting.', problemsOf(error));
   if (isDatabaseUnavailable(error)) return new ApiFailure('unavailable', 'The database is busy or out of reach.');
   const code = codeOfFramework(error);
   if (code !== null) return new ApiFailure(code, frameworkMessages[code]);
   return new ApiFailure('internal', 'Something went wrong on our side.');
-}
-
-/** Every problem with its path; an unknown key is named. */
-function problemsOf(error: ZodError): { field: string; message: string }[] {
-  return error.issues.map((issue) => ({
-    field: issue.path.join('.'),
-    message:
-      issue.code === 'unrecognized_keys'
-        ? `Unknown: ${issue.keys.map((key) => key.slice(0, 60)).join(', ')}.`
-        : issue.message,
-  }));
 }
 
 const frameworkMessages = {

@@ -4,6 +4,7 @@ import { type DeskScope } from '@/server/database/desk-scope';
 import { ApiFailure } from '@/server/errors/api-failure';
 import { ForbiddenError } from '@/server/errors/forbidden-error';
 import { readBody } from '@/server/http/read-body';
+import { readInput } from '@/server/http/read-input';
 import { fileOf, receiveFile } from '@/server/http/receive-file';
 import { noteFacts } from '@/server/http/request-facts';
 import { requestIdOf } from '@/server/http/request-id';
@@ -97,9 +98,9 @@ function answer(endpoint: Endpoint, handler: AnyHandler): RequestHandler {
   return async (request, response) => {
     const context = {
       ...admitted.get(request),
-      params: endpoint.params.parse(request.params),
-      query: endpoint.query.parse(request.query),
-      body: endpoint.body === null || endpoint.body === 'file' ? undefined : endpoint.body.parse(request.body),
+      params: readInput(endpoint.params, request.params),
+      query: readInput(endpoint.query, request.query),
+      body: endpoint.body === null || endpoint.body === 'file' ? undefined : readInput(endpoint.body, request.body),
       ...(endpoint.body === 'file' ? { file: fileOf(request, response) } : {}),
       ...(endpoint.needsVersion ? { version: versionOf(request) } : {}),
       request,

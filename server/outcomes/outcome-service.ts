@@ -24,13 +24,14 @@ export class OutcomeService {
 
   /** Every sealed entry on an underlying whose story the new bars go on telling. */
   async onBarsChanged(scope: DeskScope, underlyingId: string, fromSessionDate: string): Promise<void> {
-    const entries = await new EntryStore(scope).listSealedOn(underlyingId);
-    const touched = entries.filter(
-      ({ expirySessionDate }) => expirySessionDate === null || expirySessionDate >= fromSessionDate,
-    );
-    if (touched.length === 0) return;
-    const bars = await new BarStore(scope).newest(underlyingId, BARS);
     await scope.inTransaction(async (inner) => {
+      // The entries are held first: the bars read afterwards are then no older than those of anyone who held them before.
+      const entries = await new EntryStore(inner).holdSealedOn(underlyingId);
+      const touched = entries.filter(
+        ({ expirySessionDate }) => expirySessionDate === null || expirySessionDate >= fromSessionDate,
+      );
+      if (touched.length === 0) return;
+      const bars = await new BarStore(inner).newest(underlyingId, BARS);
       for (const entry of touched) await this.recomputeWith(inner, entry, bars);
     });
   }

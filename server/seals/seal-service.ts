@@ -18,6 +18,7 @@ import { type Ids } from '@/server/runtime/ids';
 import { newSalt } from '@/server/runtime/secrets';
 import { SealStore } from '@/server/seals/seal-store';
 import { payloadText } from '@/server/seals/sealed-payload';
+import { forecastInputSchema } from '@/shared/entries/forecast-schema';
 import { planProblemOf } from '@/shared/entries/plan-problem-of';
 
 interface Dependencies {
@@ -50,6 +51,7 @@ export class SealService {
       if (reading.kind === 'incomplete')
         throw new ApiFailure('plan-incomplete', 'The plan is not complete.', reading.problems);
       const { input } = reading;
+      refuseUnsealable(input);
       const forecast = forecastOrRefusal(input);
       refuseDisagreement(input, forecast);
       refuseExpired(input, clock.now());
@@ -94,6 +96,18 @@ function forecastOrRefusal(input: ForecastInput): Forecast {
     if (!(error instanceof DomainError)) throw error;
     throw new ApiFailure('plan-incomplete', 'The plan cannot be computed.', [planProblemOf(error)]);
   }
+}
+
+/** What cannot be read back from the seal is not sealed: numbers written in a way the stored form does not know, such as -0. */
+function refuseUnsealable(input: ForecastInput): void {
+  const result = forecastInputSchema.safeParse(input);
+  if (result.success) return;
+  const fields: Readonly<Record<string, string>> = { 'spot.at': 'spotAt', 'spot.price': 'spotPrice' };
+  const problems = result.error.issues.map(({ path, message }) => {
+    const field = path.join('.');
+    return { field: fields[field] ?? field, message };
+  });
+  throw new ApiFailure('plan-incomplete', 'The plan is not written in a way that can be sealed.', problems);
 }
 
 /** What has already settled is no forecast any more. */

@@ -3,6 +3,7 @@ import { type ForecastInput } from '@/journal/forecast/forecast-input';
 import { type ExchangeCalendar } from '@/journal/sessions/exchange-calendar';
 import { isSessionDate } from '@/journal/sessions/session-date';
 import { type DraftLeg, type DraftPlan } from '@/shared/entries/draft-plan';
+import { knownSession } from '@/shared/entries/known-session';
 import { readNumber, type Report } from '@/shared/entries/plan-problem';
 import { type Underlying } from '@/shared/underlyings/underlying';
 
@@ -40,7 +41,9 @@ function readExpiry(
 ): string | null {
   if (text === '') report(field, `${name} is missing. Choose a date.`);
   else if (!isSessionDate(text)) report(field, `${name} is not a date. Write it as YYYY-MM-DD.`);
-  else if (calendar.sessionOn(text) === null) {
+  else if (knownSession(calendar, text) === undefined)
+    report(field, `${name} ${text} lies beyond the calendar. Choose an earlier or later session.`);
+  else if (knownSession(calendar, text) === null) {
     report(
       field,
       `${name} ${text} is no session (${calendar.closureReason(text) ?? 'closed'}). Choose the session before it.`,
@@ -67,7 +70,7 @@ export function checkExpiries(
       );
     }
   }
-  const session = calendar.sessionOn(first);
+  const session = knownSession(calendar, first) ?? null;
   if (spot === null || session === null) return;
   const endsAt = underlying.settlementTime === 'am' ? session.opensAt : session.closesAt;
   if (!(spot.at < endsAt)) {

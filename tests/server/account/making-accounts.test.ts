@@ -36,6 +36,12 @@ describe('sign-up', () => {
     expect((await get('/account/me').expect(200)).body).toEqual(answer.body);
   });
 
+  it('takes the longest name, though the desk’s name then has no room for all of it', async () => {
+    const displayName = 'Ä'.repeat(120);
+    const { body } = await signUp({ displayName }).expect(201);
+    expect(body.desk.settings.name).toBe(`Desk of ${displayName}`.slice(0, 120));
+  });
+
   it('refuses an e-mail that is taken, however it is written, and makes nothing', async () => {
     const email = `Vera.${randomUUID()}@example.org`;
     await signUp({ email }).expect(201);
