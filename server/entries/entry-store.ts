@@ -80,15 +80,19 @@ export class EntryStore {
     return query.orderBy('entry.id', 'DESC').take(limit).getMany();
   }
 
-  /** Sealed, open and closed entries on an underlying, held: those a new bar can say something about. */
-  holdSealedOn(underlyingId: string): Promise<EntryEntity[]> {
+  /** Sealed, open and closed entries on an underlying: those a new bar can say something about. */
+  listSealedOn(underlyingId: string): Promise<EntryEntity[]> {
     return this.rows
       .query('entry')
       .andWhere('entry.underlyingId = :underlyingId', { underlyingId })
       .andWhere("entry.state <> 'draft'")
       .orderBy('entry.id')
-      .setLock('pessimistic_write')
       .getMany();
+  }
+
+  /** An entry of anyone's, held until the transaction ends. */
+  hold(id: string): Promise<EntryEntity> {
+    return this.rows.get(id, { locked: true });
   }
 
   private async restrictToReadable(query: ReturnType<typeof this.rows.query>): Promise<void> {

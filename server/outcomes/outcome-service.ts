@@ -24,13 +24,16 @@ export class OutcomeService {
 
   /** Every sealed entry on an underlying whose story the new bars go on telling. */
   async onBarsChanged(scope: DeskScope, underlyingId: string, fromSessionDate: string): Promise<void> {
+    const entries = await new EntryStore(scope).listSealedOn(underlyingId);
+    const ids = entries
+      .filter(({ expirySessionDate }) => expirySessionDate === null || expirySessionDate >= fromSessionDate)
+      .map(({ id }) => id);
+    if (ids.length === 0) return;
     await scope.inTransaction(async (inner) => {
-      // The entries are held first: the bars read afterwards are then no older than those of anyone who held them before.
-      const entries = await new EntryStore(inner).holdSealedOn(underlyingId);
-      const touched = entries.filter(
-        ({ expirySessionDate }) => expirySessionDate === null || expirySessionDate >= fromSessionDate,
-      );
-      if (touched.length === 0) return;
+      // The entries are held first, one by one in order: the bars read afterwards are then no older than those of whoever held
+      // them before, and no two wait for each other.
+      const touched: EntryEntity[] = [];
+      for (const id of ids) touched.push(await new EntryStore(inner).hold(id));
       const bars = await new BarStore(inner).newest(underlyingId, BARS);
       for (const entry of touched) await this.recomputeWith(inner, entry, bars);
     });

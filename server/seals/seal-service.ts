@@ -18,6 +18,7 @@ import { type Ids } from '@/server/runtime/ids';
 import { newSalt } from '@/server/runtime/secrets';
 import { SealStore } from '@/server/seals/seal-store';
 import { payloadText } from '@/server/seals/sealed-payload';
+import { UnderlyingStore } from '@/server/underlyings/underlying-store';
 import { forecastInputSchema } from '@/shared/entries/forecast-schema';
 import { planProblemOf } from '@/shared/entries/plan-problem-of';
 
@@ -47,6 +48,8 @@ export class SealService {
       if (entry.version !== version) {
         throw new ApiFailure('changed-elsewhere', 'This plan was changed since you looked at it.');
       }
+      // A bar that is being stored comes before the seal, or finds the entry sealed.
+      await new UnderlyingStore(inner).hold(entry.underlyingId);
       const { reading, closes } = await loadPlan(inner, entry.plan);
       if (reading.kind === 'incomplete')
         throw new ApiFailure('plan-incomplete', 'The plan is not complete.', reading.problems);
