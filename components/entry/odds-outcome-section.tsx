@@ -2,7 +2,7 @@ import { View } from 'react-native';
 import { OddsBand, OddsBandKey } from '@/components/charts/odds-band';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Card } from '@/components/ui/card';
-import { formatDate } from '@/components/ui/number-format';
+import { formatDate, withDatesInWords } from '@/components/ui/number-format';
 import { Rule } from '@/components/ui/rule';
 import { type Entry } from '@/shared/entries/entry';
 import { oddsStatement } from '@/shared/entries/odds-statement';
@@ -53,7 +53,8 @@ type Resolved = NonNullable<Entry['outcome']>['odds'][number];
 /** The score once there is one, else what is waited for. */
 function footNote(result: Resolved | undefined): string | undefined {
   if (result === undefined) return undefined;
-  if (result.brierScore === null) return result.waitsFor === null ? undefined : `waits for ${result.waitsFor}`;
+  if (result.brierScore === null)
+    return result.waitsFor === null ? undefined : withDatesInWords(`waits for ${result.waitsFor}`);
   const score = (value: number) => value.toFixed(value < 0.1 ? 3 : 2);
   const market = result.marketBrierScore === null ? '' : `, market ${score(result.marketBrierScore)}`;
   return `Brier ${score(result.brierScore)}${market}${result.monitoredBy === 'closes' ? ', judged by closes' : ''}`;

@@ -1,6 +1,7 @@
 import { useRouter } from 'expo-router';
 import { useDeferredValue, useState } from 'react';
-import { FlatList, View } from 'react-native';
+import { FlatList, View, type ViewStyle } from 'react-native';
+import { LandingStripKey } from '@/components/charts/landing-strip';
 import { EntryRowCard } from '@/components/journal/entry-row-card';
 import { JournalFilters } from '@/components/journal/journal-filters';
 import { Button } from '@/components/ui/button';
@@ -15,7 +16,13 @@ import { type EntryRow } from '@/shared/entries/entry';
 
 type Item =
   | { readonly kind: 'month'; readonly key: string; readonly label: string }
-  | { readonly kind: 'entry'; readonly key: string; readonly row: EntryRow };
+  | {
+      readonly kind: 'entry';
+      readonly key: string;
+      readonly row: EntryRow;
+      readonly isFirst: boolean;
+      readonly isLast: boolean;
+    };
 
 /** Entries, newest first under their months; the next page loads when the end comes in sight. */
 export function JournalList({ chosenId }: { chosenId: string | null }) {
@@ -26,6 +33,8 @@ export function JournalList({ chosenId }: { chosenId: string | null }) {
   const entries = useEntries(useDeferredValue(filter));
   const isFiltered = Object.values(filter).some((value) => value !== undefined && value !== '');
   const keepsJournal = useKeepsJournal();
+
+  const rows = entries.data?.pages.flatMap((page) => page.entries) ?? [];
 
   const head = (
     <View style={{ gap: 12, paddingBottom: 12 }}>
@@ -38,6 +47,7 @@ export function JournalList({ chosenId }: { chosenId: string | null }) {
         ) : null}
       </View>
       <JournalFilters filter={filter} onChange={setFilter} />
+      {rows.length > 0 ? <LandingStripKey /> : null}
     </View>
   );
   const body = () => {
@@ -54,7 +64,6 @@ export function JournalList({ chosenId }: { chosenId: string | null }) {
       <EmptyState title="Nothing to read yet" text="Sealed entries of the traders you mentor appear here." />
     );
   };
-  const rows = entries.data?.pages.flatMap((page) => page.entries) ?? [];
   return (
     <FlatList
       style={{ flex: 1 }}
@@ -76,14 +85,7 @@ export function JournalList({ chosenId }: { chosenId: string | null }) {
           </View>
         ) : (
           <View
-            style={{
-              backgroundColor: colours.sheet,
-              borderColor: colours.rule,
-              borderWidth: 1,
-              borderRadius: radius.card,
-              marginBottom: 8,
-              overflow: 'hidden',
-            }}
+            style={[{ backgroundColor: colours.sheet, borderColor: colours.rule, overflow: 'hidden' }, cardEdges(item)]}
           >
             <EntryRowCard
               row={item.row}
@@ -109,15 +111,30 @@ export function JournalList({ chosenId }: { chosenId: string | null }) {
 
 const monthOf = new Intl.DateTimeFormat('en-GB', { month: 'long', year: 'numeric', timeZone: 'UTC' });
 
+/** Rows of a month stand in one card: only its first and last have round corners, hairlines lie between. */
+function cardEdges({ isFirst, isLast }: { isFirst: boolean; isLast: boolean }): ViewStyle {
+  const top = isFirst ? radius.card : 0;
+  const bottom = isLast ? radius.card : 0;
+  return {
+    borderLeftWidth: 1,
+    borderRightWidth: 1,
+    borderTopWidth: 1,
+    borderBottomWidth: isLast ? 1 : 0,
+    borderTopLeftRadius: top,
+    borderTopRightRadius: top,
+    borderBottomLeftRadius: bottom,
+    borderBottomRightRadius: bottom,
+  };
+}
+
 function withMonths(rows: readonly EntryRow[]): Item[] {
   const items: Item[] = [];
-  let last = '';
-  for (const row of rows) {
+  const monthOfRow = (row: EntryRow | undefined) => row?.createdAt.slice(0, 7);
+  for (const [index, row] of rows.entries()) {
     const month = row.createdAt.slice(0, 7);
-    if (month !== last)
-      items.push({ kind: 'month', key: month, label: monthOf.format(new Date(`${month}-15T00:00:00Z`)) });
-    last = month;
-    items.push({ kind: 'entry', key: row.id, row });
+    const isFirst = monthOfRow(rows[index - 1]) !== month;
+    if (isFirst) items.push({ kind: 'month', key: month, label: monthOf.format(new Date(`${month}-15T00:00:00Z`)) });
+    items.push({ kind: 'entry', key: row.id, row, isFirst, isLast: monthOfRow(rows[index + 1]) !== month });
   }
   return items;
 }

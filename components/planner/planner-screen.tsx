@@ -4,6 +4,7 @@ import { View } from 'react-native';
 import { FormProvider, useForm, type UseFormReturn } from 'react-hook-form';
 import { ScreenFrame } from '@/components/frame/screen-frame';
 import { ConflictBanner } from '@/components/planner/conflict-banner';
+import { DiscardButton } from '@/components/planner/discard-button';
 import { PlanContext } from '@/components/planner/plan-form';
 import { PlannerSteps } from '@/components/planner/planner-steps';
 import { PlannerColumns } from '@/components/planner/planner-columns';
@@ -63,6 +64,7 @@ function Planner({ entry, detail }: { entry: Entry; detail: UnderlyingDetail }) 
           title={`Plan: ${title}`}
           back={{ label: 'Journal', onPress: () => router.navigate('/journal') }}
           note={<SavedNote saving={autosave.saving} onRetry={() => void autosave.flush()} />}
+          action={<DiscardButton entryId={entry.row.id} flush={autosave.flush} />}
           hideBottomBar
           scrolls={false}
         >

@@ -12,6 +12,7 @@ import { Txt } from '@/components/ui/text';
 import { space } from '@/components/ui/theme/metrics';
 import { useUploadPrices } from '@/hooks/prices/use-price-upload';
 import { useUnderlying } from '@/hooks/underlyings/use-underlyings';
+import { priceFileLimits } from '@/shared/prices/price-upload-endpoints';
 
 const kinds = [
   'text/csv',
@@ -30,6 +31,7 @@ export function UploadScreen({ underlyingId }: { underlyingId: string }) {
   const upload = useUploadPrices();
   const { data: detail, error, isPending, refetch } = useUnderlying(underlyingId);
   const [uploadId, setUploadId] = useState<string | null>(null);
+  const [tooLarge, setTooLarge] = useState<string | null>(null);
   if (isPending) return <LoadingState label="Loading underlying" />;
   if (error) return <ErrorState error={error} onRetry={refetch} />;
   const { symbol } = detail.underlying;
@@ -39,6 +41,10 @@ export function UploadScreen({ underlyingId }: { underlyingId: string }) {
     const picked = await DocumentPicker.getDocumentAsync({ type: kinds, multiple: false, copyToCacheDirectory: false });
     const file = picked.canceled ? undefined : picked.assets[0]?.file;
     if (file === undefined) return;
+    // Said before sending: a server that refuses in the middle of a long upload can only cut the line.
+    const isTooLarge = file.size > priceFileLimits.bytes;
+    setTooLarge(isTooLarge ? file.name : null);
+    if (isTooLarge) return;
     upload.mutate({ params: { underlyingId }, body: file }, { onSuccess: ({ id }) => setUploadId(id) });
   };
   return (
@@ -62,7 +68,14 @@ export function UploadScreen({ underlyingId }: { underlyingId: string }) {
                 Columns are found by their names, in any order. Up to 20 MB.
               </Txt>
             </View>
-            {upload.error === null ? null : (
+            {tooLarge === null ? null : (
+              <Banner
+                kind="rust"
+                title={`${tooLarge} is larger than ${priceFileLimits.bytes / 1024 / 1024} MB.`}
+                text="Save the prices alone as CSV, or split the file."
+              />
+            )}
+            {upload.error === null || tooLarge !== null ? null : (
               <Banner
                 kind="rust"
                 title={upload.error.message}

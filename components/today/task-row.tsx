@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import { Icon } from '@/components/ui/icon';
 import { type IconName } from '@/components/ui/icon-shapes';
 import { LinkRow } from '@/components/ui/link-row';
+import { withDatesInWords } from '@/components/ui/number-format';
 import { Txt } from '@/components/ui/text';
 import { useColours } from '@/components/ui/theme/use-theme';
 import { type TodayTask } from '@/shared/today/today-endpoints';

@@ -167,3 +167,8 @@ function withSign(text: string, showsPlus = false): string {
   if (isZero) return amount;
   return text.startsWith('-') ? `${minus}${amount}` : showsPlus ? `+${amount}` : amount;
 }
+
+/** A sentence with its ISO dates written as people write them: "waits for the close of 23 Dec". */
+export function withDatesInWords(text: string): string {
+  return text.replace(/\b\d{4}-\d{2}-\d{2}\b/g, (date) => formatDate(date));
+}

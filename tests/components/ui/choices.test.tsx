@@ -2,7 +2,6 @@ import { act, fireEvent, render, screen } from '@testing-library/react';
 import { useState } from 'react';
 import { Segmented } from '@/components/ui/segmented';
 import { StepBar } from '@/components/ui/step-bar';
-import { Tabs } from '@/components/ui/tabs';
 
 const drifts = [
   { value: 'zero', label: 'Zero return' },
@@ -13,20 +12,6 @@ const drifts = [
 function Drift() {
   const [value, setValue] = useState<(typeof drifts)[number]['value']>('zero');
   return <Segmented label="Drift" options={drifts} value={value} onChange={setValue} />;
-}
-
-const parts = [
-  { key: 'outcome', label: 'Outcome' },
-  { key: 'plan', label: 'Plan' },
-] as const;
-
-function Entry() {
-  const [value, setValue] = useState<(typeof parts)[number]['key']>('outcome');
-  return (
-    <Tabs label="Entry" tabs={parts} value={value} onChange={setValue}>
-      {`the ${value}`}
-    </Tabs>
-  );
 }
 
 function Planner({ reached }: { reached: number }) {
@@ -59,13 +44,12 @@ describe('Segmented', () => {
   });
 });
 
-describe('Tabs', () => {
-  it('shows the panel of the tab the arrows reach, named by that tab', () => {
-    render(<Entry />);
-    act(() => screen.getByRole('tab', { name: 'Outcome' }).focus());
-    press('ArrowRight');
-    expect(selected()).toEqual(['false', 'true']);
-    expect(screen.getByRole('tabpanel', { name: 'Plan' }).textContent).toBe('the plan');
+describe('a row of choices with none chosen', () => {
+  it('begins at the last when going backwards', () => {
+    const onChange = jest.fn();
+    render(<Segmented<string> label="Drift" options={drifts} value="none" onChange={onChange} />);
+    fireEvent.keyDown(screen.getByRole('radiogroup', { name: 'Drift' }), { key: 'ArrowLeft' });
+    expect(onChange).toHaveBeenCalledWith('own');
   });
 });
 

@@ -1,10 +1,8 @@
 import { fireEvent, render, screen } from '@testing-library/react';
 import { useState } from 'react';
-import { Checkbox } from '@/components/ui/checkbox';
 import { DateField } from '@/components/ui/date-field';
 import { TextField } from '@/components/ui/field';
 import { SelectField } from '@/components/ui/select-field';
-import { SwitchField } from '@/components/ui/switch-field';
 import { TagsField } from '@/components/ui/tags-field';
 
 const nothing = () => undefined;
@@ -77,23 +75,6 @@ describe('DateField', () => {
     expect(describedBy(input)).toBe('Wednesday 9 December 2026');
     fireEvent.change(input, { target: { value: '2026-12-18' } });
     expect(onChange).toHaveBeenCalledWith('2026-12-18');
-  });
-});
-
-describe('Checkbox and SwitchField', () => {
-  it('are a checkbox and a switch named by their labels', () => {
-    const onCheck = jest.fn();
-    const onSwitch = jest.fn();
-    render(
-      <>
-        <Checkbox label="Reviewed plans" value={false} onChange={onCheck} />
-        <SwitchField label="Weekly digest" value onChange={onSwitch} />
-      </>,
-    );
-    fireEvent.click(screen.getByRole('checkbox', { name: 'Reviewed plans' }));
-    fireEvent.click(screen.getByRole('switch', { name: 'Weekly digest' }));
-    expect(onCheck).toHaveBeenCalledWith(true);
-    expect(onSwitch).toHaveBeenCalledWith(false);
   });
 });
 
