@@ -1,7 +1,4 @@
-import { View } from 'react-native';
 import Svg, { Circle, Path } from 'react-native-svg';
-import { Txt } from '@/components/ui/text';
-import { type TextSize } from '@/components/ui/theme/metrics';
 import { useColours } from '@/components/ui/theme/use-theme';
 
 const berries = [
@@ -30,16 +27,5 @@ export function BrandMark({ size = 36 }: { size?: number }) {
         <Circle key={`${x} ${y}`} cx={x} cy={y} r={1.77} fill={bramble} />
       ))}
     </Svg>
-  );
-}
-
-/** The product's name, in its own face. */
-export function BrandWord({ size = 'title' }: { size?: TextSize }) {
-  return (
-    <View>
-      <Txt serif size={size}>
-        Brierbook
-      </Txt>
-    </View>
   );
 }

@@ -25,10 +25,6 @@ export interface ExchangeCalendar {
 /** No run of closed days is longer; a search that passes it has left the calendar. */
 const LONGEST_CLOSURE_DAYS = 30;
 
-export function isSession(calendar: ExchangeCalendar, date: SessionDate): boolean {
-  return calendar.sessionOn(date) !== null;
-}
-
 /**
  * The first session after a date.
  * @throws {DomainError} `outside-calendar`.

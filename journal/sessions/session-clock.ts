@@ -29,11 +29,6 @@ interface ClockQuestion {
   readonly settings: ClockSettings;
 }
 
-/** Variance weight of a whole session. */
-export function sessionWeight(session: ExchangeSession, { overnightShare }: ClockSettings): number {
-  return overnightShare + (1 - overnightShare) * (session.minutes / FULL_SESSION_MINUTES);
-}
-
 /**
  * Sessions of variance between two instants.
  * @returns 0 or more; whole from close to close; 0 when `to` is not later. Additive over any instant between.

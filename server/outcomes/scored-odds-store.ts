@@ -1,12 +1,6 @@
 import { type DeskScope } from '@/server/database/desk-scope';
 import { ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
 
-export interface OddsTotals {
-  readonly resolved: number;
-  readonly pending: number;
-  readonly late: number;
-}
-
 /** Stated odds of a desk's traders, by trader. */
 export class ScoredOddsStore {
   constructor(private readonly scope: DeskScope) {}

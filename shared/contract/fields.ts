@@ -21,9 +21,6 @@ export const sessionDateSchema = z.string().refine(isSessionDate, 'Write an exis
 /** A moment in UTC, ISO 8601 with milliseconds. */
 export const instantSchema = z.iso.datetime({ precision: 3 });
 
-/** Rows that are edited carry a version; a write names the version it was made from. */
-export const versionSchema = z.int().min(1);
-
 /** A person's own words: trimmed length up to 10,000 characters. */
 export const longTextSchema = z.string().max(10_000);
 export const shortTextSchema = z.string().trim().min(1).max(120);

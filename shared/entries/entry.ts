@@ -64,7 +64,6 @@ export const sealReceiptSchema = z.strictObject({
   engineVersion: z.string(),
   isLate: z.boolean(),
 });
-export type SealReceipt = z.infer<typeof sealReceiptSchema>;
 
 const optionInstrumentSchema = z.strictObject({
   kind: z.literal('option'),

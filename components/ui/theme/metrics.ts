@@ -49,5 +49,3 @@ export const sizes = {
 
 /** Least widths, in points, at which the layout changes. */
 export const breakpoints = { medium: 600, wide: 1024 } as const;
-
-export const motion = { shortMs: 120, longMs: 200 } as const;
