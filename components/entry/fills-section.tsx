@@ -1,24 +1,22 @@
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { View } from 'react-native';
 import { AddFillDialog } from '@/components/entry/add-fill-dialog';
+import { FillList } from '@/components/entry/fill-list';
+import { contractWords, fillActs } from '@/components/entry/fill-words';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { Dialog } from '@/components/ui/dialog';
-import { formatDate, formatInstant, formatMoney } from '@/components/ui/number-format';
+import { formatInstant, formatMoney } from '@/components/ui/number-format';
 import { SignedAmount } from '@/components/ui/signed-amount';
 import { DataTable } from '@/components/ui/table';
 import { Txt } from '@/components/ui/text';
+import { useLayout } from '@/components/ui/use-layout';
 import { useAbandonEntry, useRemoveFill } from '@/hooks/entries/use-entries';
 import { type EntryFill } from '@/shared/entries/entry';
 
-const acts: Record<EntryFill['kind'], string> = {
-  buy: 'Buy',
-  sell: 'Sell',
-  expiry: 'Expired',
-  assignment: 'Assigned',
-  exercise: 'Exercised',
-};
+/** Under this width of the screen the table would scroll sideways; a list has room. */
+const TABLE_FROM = 760;
 
 /** The fills of an entry, tied to the cent, and the ways to add one, take one out, or say that none will come. */
 export function FillsSection({ entry }: { entry: SealedEntry }) {
@@ -28,6 +26,16 @@ export function FillsSection({ entry }: { entry: SealedEntry }) {
   const abandon = useAbandonEntry();
   const canAdd = isOwn && row.state !== 'abandoned';
   const { currency } = row.underlying;
+  const renderRemove = (fill: EntryFill) =>
+    canAdd && fill.madeBy === null ? (
+      <Button
+        kind="text"
+        icon="trash"
+        label={`Take out ${fillActs[fill.kind].toLowerCase()} of ${contractWords(fill)}`}
+        iconOnly
+        onPress={() => setRemoving(fill)}
+      />
+    ) : null;
   return (
     <Card
       title="Fills"
@@ -46,45 +54,7 @@ export function FillsSection({ entry }: { entry: SealedEntry }) {
               : 'Add each execution as your broker reports it. A plan that is not traded is scored too.'}
           </Txt>
         ) : (
-          <DataTable
-            caption={`Fills in ${currency}`}
-            columns={[
-              { key: 'when', header: 'When', align: 'left' },
-              { key: 'act', header: 'Act', align: 'left' },
-              { key: 'what', header: 'Contract', align: 'left', flex: 2 },
-              { key: 'quantity', header: 'Quantity', align: 'right' },
-              { key: 'price', header: 'Price', align: 'right' },
-              { key: 'fees', header: 'Fees', align: 'right' },
-              { key: 'cash', header: 'Cash', align: 'right' },
-              ...(canAdd ? [{ key: 'remove', header: '', align: 'right' as const }] : []),
-            ]}
-            rows={[
-              ...fills.map((fill) => ({
-                key: fill.id,
-                cells: {
-                  when: formatInstant(fill.tradedAt, fill.timeZone),
-                  act: acts[fill.kind],
-                  what: contractWords(fill),
-                  quantity: formatMoney(fill.quantity, { places: 0 }),
-                  price: formatMoney(fill.price),
-                  fees: formatMoney(fill.fees),
-                  cash: <SignedAmount value={fill.cash} currency={currency} size="row" />,
-                  remove:
-                    fill.madeBy === null ? (
-                      <Button
-                        kind="text"
-                        icon="trash"
-                        label={`Take out ${acts[fill.kind].toLowerCase()} of ${contractWords(fill)}`}
-                        iconOnly
-                        onPress={() => setRemoving(fill)}
-                      />
-                    ) : null,
-                },
-              })),
-              ...(row.realisedProfit === null ? [] : [totalRow(row)]),
-            ]}
-            minWidth={640}
-          />
+          <FillTable entry={entry} renderRemove={renderRemove} />
         )}
         {canAdd && fills.length === 0 ? (
           <View style={{ flexDirection: 'row', gap: 8, flexWrap: 'wrap', alignItems: 'center' }}>
@@ -110,26 +80,61 @@ export function FillsSection({ entry }: { entry: SealedEntry }) {
   );
 }
 
-function totalRow({ state, realisedProfit, underlying }: SealedEntry['row']) {
-  const bold = state === 'open' ? 'Realised so far' : 'Realised';
-  return {
+interface FillTableProps {
+  readonly entry: SealedEntry;
+  readonly renderRemove: (fill: EntryFill) => ReactNode;
+}
+
+function FillTable({ entry: { fills, row }, renderRemove }: FillTableProps) {
+  const { width } = useLayout();
+  const { currency } = row.underlying;
+  const { realisedProfit } = row;
+  const realisedLabel = row.state === 'open' ? 'Realised so far' : 'Realised';
+  if (width < TABLE_FROM)
+    return <FillList {...{ fills, currency, realisedLabel, renderRemove }} realised={realisedProfit} />;
+  const total = {
     key: 'total',
     cells: {
       when: (
         <Txt size="row" weight="semibold">
-          {bold}
+          {realisedLabel}
         </Txt>
       ),
-      cash: <SignedAmount value={realisedProfit} currency={underlying.currency} size="row" />,
+      cash: <SignedAmount value={realisedProfit} currency={currency} size="row" />,
     },
   };
-}
-
-/** "23 Dec 97 put", or the shares an exercise made. */
-export function contractWords({ instrument }: Pick<EntryFill, 'instrument'>): string {
-  return instrument.kind === 'stock'
-    ? `${instrument.symbol} shares`
-    : `${formatDate(instrument.expirySessionDate, 'short')} ${instrument.strikePrice} ${instrument.type}`;
+  return (
+    <DataTable
+      caption={`Fills in ${currency}`}
+      columns={[
+        { key: 'when', header: 'When', flex: 2 },
+        { key: 'act', header: 'Act' },
+        { key: 'what', header: 'Contract', flex: 2 },
+        { key: 'quantity', header: 'Quantity', align: 'right' },
+        { key: 'price', header: 'Price', align: 'right' },
+        { key: 'fees', header: 'Fees', align: 'right' },
+        { key: 'cash', header: 'Cash', align: 'right', flex: 1.5 },
+        { key: 'remove', header: '', align: 'right', width: 52 },
+      ]}
+      rows={[
+        ...fills.map((fill) => ({
+          key: fill.id,
+          cells: {
+            when: formatInstant(fill.tradedAt, fill.timeZone),
+            act: fillActs[fill.kind],
+            what: contractWords(fill),
+            quantity: formatMoney(fill.quantity, { places: 0 }),
+            price: formatMoney(fill.price),
+            fees: formatMoney(fill.fees),
+            cash: <SignedAmount value={fill.cash} currency={currency} size="row" />,
+            remove: renderRemove(fill),
+          },
+        })),
+        ...(realisedProfit === null ? [] : [total]),
+      ]}
+      minWidth={640}
+    />
+  );
 }
 
 function RemoveFillDialog({ entryId, fill, onClose }: { entryId: string; fill: EntryFill; onClose: () => void }) {
@@ -151,7 +156,7 @@ function RemoveFillDialog({ entryId, fill, onClose }: { entryId: string; fill: E
       }
     >
       <Txt size="body" colour="inkSoft">
-        {`${acts[fill.kind]} ${fill.quantity} ${contractWords(fill)} at ${fill.price}. For a mistyped fill only; the audit trail keeps it.`}
+        {`${fillActs[fill.kind]} ${fill.quantity} ${contractWords(fill)} at ${fill.price}. For a mistyped fill only; the audit trail keeps it.`}
       </Txt>
       {remove.error === null ? null : (
         <Txt size="row" colour="rust" role="alert">

@@ -1,5 +1,5 @@
 import { useEffect, type ReactNode } from 'react';
-import { View } from 'react-native';
+import { View, type ViewStyle } from 'react-native';
 import { BesideListContext } from '@/components/frame/frame-context';
 import { Txt } from '@/components/ui/text';
 import { sizes } from '@/components/ui/theme/metrics';
@@ -27,16 +27,13 @@ export function ListDetail({ title, list, detail, placeholder = 'Choose one at t
   if (!isWide) {
     return hasDetail ? <BesideListContext value={false}>{detail}</BesideListContext> : <ListMain>{list}</ListMain>;
   }
+  const Pair = hasDetail ? View : ListMain;
   return (
-    <View style={{ flex: 1, flexDirection: 'row', minHeight: 0 }}>
+    <Pair style={{ flex: 1, flexDirection: 'row', minHeight: 0 }}>
       <View style={{ width: sizes.list, minHeight: 0, borderRightWidth: 1, borderColor: colours.rule }}>
-        {hasDetail ? (
-          <View role="region" aria-label={title} style={{ flex: 1, minHeight: 0 }}>
-            {list}
-          </View>
-        ) : (
-          <ListMain>{list}</ListMain>
-        )}
+        <View role="region" aria-label={title} style={{ flex: 1, minHeight: 0 }}>
+          {list}
+        </View>
       </View>
       <View style={{ flex: 1, minWidth: 0, minHeight: 0 }}>
         {hasDetail ? (
@@ -47,13 +44,13 @@ export function ListDetail({ title, list, detail, placeholder = 'Choose one at t
           </View>
         )}
       </View>
-    </View>
+    </Pair>
   );
 }
 
-function ListMain({ children }: { children: ReactNode }) {
+function ListMain({ children, style }: { children: ReactNode; style?: ViewStyle }) {
   return (
-    <View role="main" id="main" {...{ tabIndex: -1 }} style={{ flex: 1, minHeight: 0 }}>
+    <View role="main" id="main" {...{ tabIndex: -1 }} style={[{ flex: 1, minHeight: 0 }, style]}>
       {children}
     </View>
   );

@@ -98,7 +98,9 @@ function dates(row: EntryRow): string {
       ? `Draft of ${day(row.createdAt.slice(0, 10))}`
       : `Plan for ${day(row.exitSessionDate)}`;
   }
-  const sessions = row.holdingSessions === null ? '' : `, ${sessionWords(row.holdingSessions)}`;
+  // Where a flag stands beside the dates, it needs the room of the sessions.
+  const hasFlag = row.isLateSeal || row.needsLesson;
+  const sessions = row.holdingSessions === null || hasFlag ? '' : `, ${sessionWords(row.holdingSessions)}`;
   const from = row.firstFillAt ?? row.sealedAt;
   if (row.lastFillAt !== null && from !== null && row.state !== 'open') {
     return `${day(from.slice(0, 10))} to ${day(row.lastFillAt.slice(0, 10))}${sessions}`;

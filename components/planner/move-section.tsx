@@ -117,7 +117,6 @@ export function HoldSection() {
   const holding = useWatch<DraftPlan, 'holding'>({ name: 'holding' });
   const drift = useWatch<DraftPlan, 'drift'>({ name: 'drift' });
   const { preview } = usePlan();
-  const { kind: layout } = useLayout();
   const forecast = preview.kind === 'ready' ? preview.forecast : null;
 
   return (
@@ -155,7 +154,7 @@ export function HoldSection() {
         <Segmented
           label="Drift behind the odds"
           options={[
-            { value: 'zeroReturn', label: layout === 'phone' ? 'Zero return' : 'Zero expected return' },
+            { value: 'zeroReturn', label: 'Zero return' },
             { value: 'riskNeutral', label: 'Risk-neutral' },
             { value: 'ownView', label: 'My view' },
           ]}

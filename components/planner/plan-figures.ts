@@ -18,6 +18,8 @@ export function planFigures(preview: PlanPreview, currency: string): ResultFigur
   const range = (low: number, high: number, format: (value: number) => string) =>
     `${format(Math.min(low, high))} to ${format(Math.max(low, high))}`;
   const signed = (value: number) => formatMoney(value, { sign: true });
+  // Cents of large amounts would not fit under the mean on a phone, and say nothing.
+  const places = Math.max(Math.abs(mean.low), Math.abs(mean.high)) >= 1_000 ? 0 : 2;
   const end = (amount: number | null, odds: number, label: string, tone: 'tide' | 'rust'): ResultFigure => ({
     label: `${label}, ${currency}`,
     value: amount === null ? 'no limit' : signed(amount),
@@ -33,7 +35,7 @@ export function planFigures(preview: PlanPreview, currency: string): ResultFigur
     {
       label: `Mean, ${currency}`,
       value: signed(mean.base),
-      note: range(mean.low, mean.high, signed),
+      note: range(mean.low, mean.high, (value) => formatMoney(value, { sign: true, places })),
       tone: mean.base >= 0 ? 'tide' : 'rust',
     },
     end(ends.greatestLoss, ends.oddsOfGreatestLoss, 'Most to lose', 'rust'),
