@@ -21,7 +21,7 @@ export function AccountPage({ title, children, foot }: Props) {
   const isWide = kind === 'wide';
   return (
     <ScrollView
-      style={{ backgroundColor: isWide ? colours.paper : colours.sheet }}
+      style={{ backgroundColor: colours.paper }}
       contentContainerStyle={{ flexGrow: 1, flexDirection: isWide ? 'row' : 'column' }}
     >
       <View
@@ -35,15 +35,17 @@ export function AccountPage({ title, children, foot }: Props) {
         style={{
           flexGrow: isWide ? 520 : 1,
           flexBasis: isWide ? 0 : 'auto',
-          backgroundColor: colours.sheet,
+          backgroundColor: isWide ? colours.sheet : colours.paper,
           justifyContent: isWide ? 'center' : 'flex-start',
           padding: isWide ? 56 : space.gutterPhone,
-          paddingTop: isWide ? 56 : 28,
+          paddingTop: isWide ? 56 : 4,
           gap: 20,
         }}
       >
-        <View style={{ gap: 20, width: '100%', maxWidth: 420, alignSelf: 'center' }}>
-          <Heading level={1}>{title}</Heading>
+        <View style={{ gap: isWide ? 20 : 16, width: '100%', maxWidth: 420, alignSelf: 'center' }}>
+          <Heading level={1} size={isWide ? 'title' : 'head'}>
+            {title}
+          </Heading>
           {children}
           {foot}
           <Txt size="note" colour="inkSoft">
@@ -83,17 +85,15 @@ function Introduction({ isWide }: { isWide: boolean }) {
       <Txt serif size={isWide ? 'opening' : 'head'}>
         Write the odds down before the trade. Score them after the close.
       </Txt>
-      {isWide ? (
-        <LandingBell
-          spot={example.spot}
-          totalDeviation={example.totalDeviation}
-          marks={[
-            { kind: 'strike', price: priceAt(example.strike), sigma: example.strike, label: 'Strike' },
-            { kind: 'target', price: priceAt(example.target), sigma: example.target, label: 'Target' },
-          ]}
-          landed={{ price: priceAt(example.landed), sigma: example.landed }}
-        />
-      ) : null}
+      <LandingBell
+        spot={example.spot}
+        totalDeviation={example.totalDeviation}
+        marks={[
+          { kind: 'strike', price: priceAt(example.strike), sigma: example.strike, label: 'Strike' },
+          { kind: 'target', price: priceAt(example.target), sigma: example.target, label: 'Target' },
+        ]}
+        landed={{ price: priceAt(example.landed), sigma: example.landed }}
+      />
       <Txt size={isWide ? 'body' : 'row'} colour="inkSoft">
         The bell is what you expected; the berry is where it landed. Brierbook keeps both, for every trade in
         short-dated options.

@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { TextField } from '@/components/ui/field';
+import { DataTable } from '@/components/ui/table';
 import { Txt } from '@/components/ui/text';
 import { useToast } from '@/components/ui/toast';
 import { useEditDeskSettings } from '@/hooks/desk/use-desk';
@@ -32,11 +33,37 @@ const storedName: Record<keyof Typed, string> = {
   feePerContract: 'feePerContract',
 };
 
+const percent = (fraction: number) => String(Number((fraction * 100).toPrecision(10)));
+
 /** What the desk presets for every plan; a lead may change it. */
 export function DeskSettingsCard({ settings, canEdit }: { settings: DeskSettings; canEdit: boolean }) {
+  return canEdit ? <PresetsForm settings={settings} /> : <Presets settings={settings} />;
+}
+
+function Presets({ settings }: { settings: DeskSettings }) {
+  const rows = [
+    ['Currency', settings.currency],
+    ['Rate', `${percent(settings.ratePerYear)}% a year`],
+    ['Overnight share', `${percent(settings.overnightShare)}%`],
+    ['Fee a contract and side', `${settings.feePerContract} ${settings.currency}`],
+  ];
+  return (
+    <Card title="Presets of every plan" subtitle="The lead of the desk changes them">
+      <DataTable
+        caption="Presets of every plan"
+        columns={[
+          { key: 'what', header: 'Preset', flex: 1 },
+          { key: 'value', header: 'Value', flex: 1, align: 'right' },
+        ]}
+        rows={rows.map(([what = '', value = '']) => ({ key: what, cells: { what, value } }))}
+      />
+    </Card>
+  );
+}
+
+function PresetsForm({ settings }: { settings: DeskSettings }) {
   const toast = useToast();
   const edit = useEditDeskSettings();
-  const percent = (fraction: number) => String(Number((fraction * 100).toPrecision(10)));
   const [typed, setTyped] = useState<Typed>({
     name: settings.name,
     currency: settings.currency,
@@ -65,10 +92,7 @@ export function DeskSettingsCard({ settings, canEdit }: { settings: DeskSettings
     );
   };
   return (
-    <Card
-      title="Presets of every plan"
-      subtitle={canEdit ? 'A plan may change them for itself' : 'The lead of the desk changes them'}
-    >
+    <Card title="Presets of every plan" subtitle="A plan may change them for itself">
       <View style={{ gap: 12 }}>
         {fields.map(([key, label, suffix]) => (
           <TextField
@@ -76,7 +100,6 @@ export function DeskSettingsCard({ settings, canEdit }: { settings: DeskSettings
             label={label}
             suffix={suffix}
             value={typed[key]}
-            disabled={!canEdit}
             onChangeText={(text) => setTyped({ ...typed, [key]: text })}
             error={numberProblem === key ? 'Write a number such as 4.25.' : edit.error?.problemOf(storedName[key])}
           />
@@ -86,11 +109,9 @@ export function DeskSettingsCard({ settings, canEdit }: { settings: DeskSettings
             {`${edit.error.message} ${edit.error.action}`}
           </Txt>
         )}
-        {canEdit ? (
-          <View style={{ flexDirection: 'row' }}>
-            <Button kind="secondary" label="Save presets" busy={edit.isPending} busyLabel="Saving …" onPress={save} />
-          </View>
-        ) : null}
+        <View style={{ flexDirection: 'row' }}>
+          <Button kind="secondary" label="Save presets" busy={edit.isPending} busyLabel="Saving …" onPress={save} />
+        </View>
       </View>
     </Card>
   );

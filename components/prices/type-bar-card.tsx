@@ -71,7 +71,7 @@ export function TypeBarCard({ detail }: { detail: UnderlyingDetail }) {
             />
           </View>
           {fields.map(([key, label]) => (
-            <View key={key} style={{ flexGrow: 1, flexBasis: 150 }}>
+            <View key={key} style={{ flexGrow: 1, flexBasis: key === 'settlement' ? 240 : 130 }}>
               <TextField
                 label={label}
                 value={prices[key]}

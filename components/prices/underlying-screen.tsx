@@ -46,6 +46,23 @@ function Underlying({ detail }: { detail: UnderlyingDetail }) {
   const ladder = useMemo(() => (closes.length < 3 ? [] : volatilityLadder(closes)), [closes]);
   const last = bars.at(-1);
   const isWide = layout === 'wide';
+  const keeping = (
+    <>
+      <Button
+        kind="secondary"
+        icon="upload"
+        label="Upload bars"
+        onPress={() => router.push({ pathname: '/prices/[underlyingId]/upload', params })}
+      />
+      <Button
+        kind="text"
+        icon="pencil"
+        label="Edit"
+        onPress={() => router.push({ pathname: '/prices/[underlyingId]/edit', params })}
+      />
+    </>
+  );
+  const figures = ladder.length > 0 ? <MoveTable ladder={ladder} /> : null;
   return (
     <ScreenFrame
       title={underlying.symbol}
@@ -58,33 +75,23 @@ function Underlying({ detail }: { detail: UnderlyingDetail }) {
       back={isWide ? undefined : { label: 'Prices', onPress: () => router.navigate('/prices') }}
       action={
         keepsJournal ? (
-          <Button
-            kind={isWide ? 'secondary' : 'primary'}
-            icon="plus"
-            label="Plan a trade"
-            busy={plan.isPending}
-            onPress={() => plan.start(underlying.id)}
-          />
+          <View style={{ flexDirection: 'row', gap: 8 }}>
+            {isWide ? keeping : null}
+            <Button
+              kind="primary"
+              icon="plus"
+              label="Plan a trade"
+              busy={plan.isPending}
+              onPress={() => plan.start(underlying.id)}
+            />
+          </View>
         ) : undefined
       }
     >
       <View style={{ gap: space.cardGap }}>
         {plan.error === null ? null : <ErrorState error={plan.error} onRetry={plan.reset} />}
-        {keepsJournal ? (
-          <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>
-            <Button
-              kind="secondary"
-              icon="upload"
-              label="Upload bars"
-              onPress={() => router.push({ pathname: '/prices/[underlyingId]/upload', params })}
-            />
-            <Button
-              kind="text"
-              icon="pencil"
-              label="Edit"
-              onPress={() => router.push({ pathname: '/prices/[underlyingId]/edit', params })}
-            />
-          </View>
+        {keepsJournal && !isWide ? (
+          <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 8 }}>{keeping}</View>
         ) : null}
         {detail.sessionsBehind > 0 && last !== undefined ? (
           <Banner
@@ -120,10 +127,11 @@ function Underlying({ detail }: { detail: UnderlyingDetail }) {
                     highlightLast={HEADLINE_WINDOW}
                   />
                 </Card>
+                {isWide ? figures : null}
               </View>
               <View style={[{ gap: space.cardGap, minWidth: 0 }, isWide ? { flex: 1 } : null]}>
                 <LadderCard ladder={ladder} />
-                {ladder.length > 0 ? <MoveTable ladder={ladder} /> : null}
+                {isWide ? null : figures}
               </View>
             </View>
           </>
@@ -144,6 +152,7 @@ function Headline({
   closes: readonly number[];
   ladder: readonly VolatilityEstimate[];
 }) {
+  const isWide = useLayout().kind === 'wide';
   const last = detail.bars.at(-1);
   const month = ladder.find(({ method }) => method.kind === 'window' && method.window === HEADLINE_WINDOW);
   const place = useMemo(() => placeInOwnYear(closes, HEADLINE_WINDOW), [closes]);
@@ -173,9 +182,9 @@ function Headline({
     ['Bars', String(detail.barCount), last === undefined ? '' : `to ${formatDate(last.sessionDate, 'long')}`],
   ];
   return (
-    <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 16, rowGap: 12 }}>
+    <View style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: isWide ? 32 : 0, rowGap: 12 }}>
       {figures.map(([label, value, note]) => (
-        <View key={label} style={{ minWidth: 132, flexGrow: 1 }}>
+        <View key={label} style={isWide ? { minWidth: 132 } : { width: '50%', paddingRight: 12 }}>
           <Txt size="note" colour="inkSoft">
             {label}
           </Txt>

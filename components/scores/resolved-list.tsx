@@ -5,6 +5,8 @@ import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { formatDate, formatOdds } from '@/components/ui/number-format';
 import { DataTable } from '@/components/ui/table';
+import { textSizes } from '@/components/ui/theme/metrics';
+import { sansFace } from '@/components/ui/theme/type-face';
 import { useColours } from '@/components/ui/theme/use-theme';
 import { useLayout } from '@/components/ui/use-layout';
 import { type Scores } from '@/shared/scores/score-endpoints';
@@ -35,7 +37,12 @@ export function ResolvedList({ scores }: { scores: Scores }) {
               what: (
                 <Link
                   href={{ pathname: '/journal/[entryId]', params: { entryId: item.entryId } }}
-                  style={{ color: colours.bramble, textDecorationLine: 'underline' }}
+                  style={{
+                    ...sansFace('regular'),
+                    fontSize: textSizes.row.fontSize,
+                    color: colours.bramble,
+                    textDecorationLine: 'underline',
+                  }}
                 >
                   {`${item.symbol} ${item.structureName}: ${item.statement}`}
                 </Link>

@@ -45,10 +45,10 @@ export function TaskRow({ task, isFirst, href }: Props) {
         </View>
         <View style={{ flex: 1, gap: 2 }}>
           <Txt size="body" weight="semibold">
-            {task.title}
+            {withDatesInWords(task.title)}
           </Txt>
           <Txt size="row" colour="inkSoft">
-            {task.why}
+            {withDatesInWords(task.why)}
           </Txt>
           <View style={{ flexDirection: 'row', alignItems: 'center', gap: 4 }}>
             <Txt size="row" weight="semibold" colour="bramble">

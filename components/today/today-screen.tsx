@@ -1,4 +1,5 @@
 import { useRouter, type Href } from 'expo-router';
+import { useState } from 'react';
 import { View } from 'react-native';
 import { SessionsAhead } from '@/components/charts/sessions-ahead';
 import { ScreenFrame } from '@/components/frame/screen-frame';
@@ -28,15 +29,18 @@ const groups: readonly (readonly [TodayTask['group'], string])[] = [
 export function TodayScreen() {
   const router = useRouter();
   const keepsJournal = useKeepsJournal();
+  const isPhone = useLayout().kind === 'phone';
   const { data: today, error, isPending, refetch } = useToday();
   if (isPending) return <LoadingState label="Loading today" />;
   if (error) return <ErrorState error={error} onRetry={refetch} />;
   return (
     <ScreenFrame
       title="Today"
-      note={sessionWords(today)}
+      note={isPhone ? shortSessionWords(today) : sessionWords(today)}
       action={
-        keepsJournal ? <Button icon="plus" label="Plan a trade" onPress={() => router.push('/plan/new')} /> : undefined
+        keepsJournal ? (
+          <Button kind="primary" icon="plus" label="Plan a trade" onPress={() => router.push('/plan/new')} />
+        ) : undefined
       }
     >
       <TodayBody today={today} />
@@ -110,9 +114,14 @@ function Section({ label, count, children }: { label: string; count?: string; ch
   );
 }
 
+/** So many lines of one group are read at a glance; the rest waits behind a button. */
+const MOST_TASKS = 6;
+
 function TaskGroup({ label, tasks }: { label: string; tasks: readonly TodayTask[] }) {
   const colours = useColours();
+  const [showsAll, setShowsAll] = useState(false);
   if (tasks.length === 0) return null;
+  const shown = showsAll || tasks.length <= MOST_TASKS + 1 ? tasks : tasks.slice(0, MOST_TASKS);
   return (
     <Section label={label} count={String(tasks.length)}>
       <View
@@ -125,10 +134,19 @@ function TaskGroup({ label, tasks }: { label: string; tasks: readonly TodayTask[
           overflow: 'hidden',
         }}
       >
-        {tasks.map((task, index) => (
+        {shown.map((task, index) => (
           <TaskRow key={`${task.title} ${index}`} task={task} isFirst={index === 0} href={hrefOf(task)} />
         ))}
       </View>
+      {shown.length < tasks.length ? (
+        <View style={{ flexDirection: 'row' }}>
+          <Button
+            kind="secondary"
+            label={`Show ${tasks.length - shown.length} more`}
+            onPress={() => setShowsAll(true)}
+          />
+        </View>
+      ) : null}
     </Section>
   );
 }
@@ -176,4 +194,10 @@ function sessionWords({ session, nextSession }: Today): string {
   const day = formatDate(session.sessionDate, 'full');
   const next = `next session ${formatDate(nextSession.sessionDate, 'weekday')}, ${nextSession.kind === 'early' ? 'early close' : 'full'}`;
   return session.isOver ? `After the close of ${day} · ${next}` : `${day}, the session is open · ${next}`;
+}
+
+/** One line beside the button of a phone's top bar; the next sessions stand further down. */
+function shortSessionWords({ session }: Today): string {
+  const day = formatDate(session.sessionDate, 'weekday');
+  return session.isOver ? `${day}, after the close` : `${day}, session open`;
 }

@@ -100,7 +100,9 @@ describe('ListDetail', () => {
   it('makes the list the main landmark and names the tab after it while nothing is chosen', () => {
     setWidth(1440);
     render(<ListDetail title="Journal" list={rows} detail={null} />);
-    expect(screen.getByRole('main').textContent).toBe('the rows');
+    const list = screen.getByRole('region', { name: 'Journal' });
+    expect(list.textContent).toBe('the rows');
+    expect(screen.getByRole('main').contains(list)).toBe(true);
     expect(document.title).toBe('Journal · Brierbook');
   });
 });
