@@ -16,6 +16,7 @@ import { type OutcomeService } from '@/server/outcomes/outcome-service';
 import { type Clock } from '@/server/runtime/clock';
 import { type Ids } from '@/server/runtime/ids';
 import { newSalt } from '@/server/runtime/secrets';
+import { refuseUntimely } from '@/server/seals/refuse-untimely';
 import { SealStore } from '@/server/seals/seal-store';
 import { payloadText } from '@/server/seals/sealed-payload';
 import { UnderlyingStore } from '@/server/underlyings/underlying-store';
@@ -57,9 +58,9 @@ export class SealService {
       refuseUnsealable(input);
       const forecast = forecastOrRefusal(input);
       refuseDisagreement(input, forecast);
-      refuseExpired(input, clock.now());
-
       const sealedAt = clock.now();
+      refuseUntimely(input, sealedAt);
+
       const used = closes.filter(
         ({ sessionDate }) =>
           input.volatility.lastSessionDate !== null && sessionDate <= input.volatility.lastSessionDate,
@@ -111,15 +112,6 @@ function refuseUnsealable(input: ForecastInput): void {
     return { field: fields[field] ?? field, message };
   });
   throw new ApiFailure('plan-incomplete', 'The plan is not written in a way that can be sealed.', problems);
-}
-
-/** What has already settled is no forecast any more. */
-function refuseExpired({ legs, underlying }: ForecastInput, now: Date): void {
-  const session = usOptionsCalendar.sessionOn(legs[0]?.expirySessionDate ?? '');
-  const endsAt = underlying.settlementTime === 'am' ? session?.opensAt : session?.closesAt;
-  if (endsAt !== undefined && now.toISOString() < endsAt) return;
-  const message = 'The options have expired already. Choose a later expiry.';
-  throw new ApiFailure('plan-incomplete', message, [{ field: 'legs.0.expirySessionDate', message }]);
 }
 
 /** Each European leg is priced again by code that shares nothing with ours; beyond its known accuracy nothing is sealed. */

@@ -142,6 +142,36 @@ describe('a draft', () => {
     await trader.post(`/entries/${id}/seal`).set({ 'If-Match': '1', Cookie: cookie }).expect(422);
     app.clock.set('2026-12-09T22:00:00.000Z');
   });
+
+  it.each([
+    ['of before the last close', '2026-12-09T20:59:59.999Z', 'spotPrice'],
+    ['of a time to come', '2026-12-09T22:05:00.001Z', 'spotAt'],
+  ])('made from a price %s is not sealed: its answer could be known', async (_, spotAt, field) => {
+    const id = await addDraft(trader, plan({ spotPrice: '98.40', spotAt }));
+    const { body } = await seal(id, 1).expect(422);
+    expect(body.error.problems).toEqual([{ field, message: expect.stringContaining('Type the price of now') }]);
+    expect((await trader.get(`/entries/${id}`)).body.row.state).toBe('draft');
+  });
+
+  it('made from a stored close is not sealed once a later session has closed', async () => {
+    const older = await app.person({ role: 'trader' });
+    const id = await addDraft(older, completePlan(await addUnderlying(older)));
+    app.clock.set('2026-12-10T21:00:00.000Z');
+    const answer = await app.anonymous.post('/account/sign-in').send({ email: older.email, password: older.password });
+    const cookie = answer.get('Set-Cookie')?.[0]?.split(';')[0] ?? '';
+    const { body } = await older.post(`/entries/${id}/seal`).set({ 'If-Match': '1', Cookie: cookie }).expect(422);
+    expect(body.error.problems).toEqual([
+      { field: 'spotPrice', message: expect.stringContaining('add the last close') },
+    ]);
+    app.clock.set('2026-12-09T22:00:00.000Z');
+  });
+
+  it.each(['2026-12-09T21:00:00.000Z', '2026-12-09T22:05:00.000Z'])(
+    'made from the price of the last close or of now is sealed (%s)',
+    async (spotAt) => {
+      await seal(await addDraft(trader, plan({ spotPrice: '98.40', spotAt })), 1).expect(200);
+    },
+  );
 });
 
 describe('the list of entries', () => {
