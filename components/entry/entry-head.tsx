@@ -4,15 +4,18 @@ import { formatDate, formatMoney } from '@/components/ui/number-format';
 import { SignedAmount } from '@/components/ui/signed-amount';
 import { StateBerry } from '@/components/ui/state-berry';
 import { Txt } from '@/components/ui/text';
+import { useLayout } from '@/components/ui/use-layout';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 
 /** State, dates and trader at the left; the profit, with what was expected, at the right. */
 export function EntryHead({ entry }: { entry: SealedEntry }) {
   const { row, outcome } = entry;
   const profit = outcome?.profit ?? null;
+  const atRight = useLayout().kind !== 'phone';
+  const align = atRight ? 'right' : 'left';
   return (
     <View style={{ flexDirection: 'row', flexWrap: 'wrap', justifyContent: 'space-between', gap: 12 }}>
-      <View style={{ gap: 4 }}>
+      <View style={{ gap: 4, flexShrink: 1, maxWidth: '100%' }}>
         <View style={{ flexDirection: 'row', gap: 8, alignItems: 'center', flexWrap: 'wrap' }}>
           <StateBerry state={row.state} withWord />
           {row.isLateSeal ? <Chip kind="amber" icon="clock" label="late seal" /> : null}
@@ -25,13 +28,13 @@ export function EntryHead({ entry }: { entry: SealedEntry }) {
         </Txt>
       </View>
       {profit === null ? null : (
-        <View style={{ alignItems: 'flex-end' }}>
+        <View style={{ alignItems: atRight ? 'flex-end' : 'flex-start' }}>
           <SignedAmount value={profit.realised} currency={row.underlying.currency} size="figure" />
-          <Txt size="row" colour="inkSoft" align="right">
+          <Txt size="row" colour="inkSoft" align={align}>
             {`${profit.isFinal ? '' : 'so far; '}expected mean ${formatMoney(profit.expectedMean, { sign: true })} ${row.underlying.currency}`}
           </Txt>
           {profit.percentileHigh === null || !profit.isFinal ? null : (
-            <Txt size="row" colour="inkSoft" align="right">
+            <Txt size="row" colour="inkSoft" align={align}>
               {placeInForecast(profit.percentileLow ?? 0, profit.percentileHigh)}
             </Txt>
           )}

@@ -72,7 +72,7 @@ function TopBar({ title, back, note, action }: Pick<Props, 'title' | 'back' | 'n
   const titleSize = isWide ? (hasBack || isBesideList ? 'title' : 'figure') : hasBack ? 'head' : 'title';
   const bar: ViewStyle = isWide
     ? { paddingTop: 24, paddingBottom: 16, paddingHorizontal: space.gutterWide }
-    : { minHeight: sizes.topBar, paddingVertical: 4, paddingHorizontal: space.gutterPhone };
+    : { minHeight: sizes.topBar, paddingVertical: 10, paddingHorizontal: space.gutterPhone };
   return (
     <View style={[bar, { flexDirection: 'row', alignItems: 'center', gap: 8, backgroundColor: colours.paper }]}>
       {hasBack ? (
