@@ -219,7 +219,10 @@ function Row({ height, ground, children }: { height: number; ground?: string; ch
 }
 
 function Axis({ x, foot }: { x: Scale; foot: number }) {
-  return x.ticks(4).map((tick) => (
+  const [from = 0, to = 0] = x.range();
+  // A narrow phone leaves room for one or two numbers only.
+  const count = Math.max(1, Math.min(4, Math.floor((to - from) / 28)));
+  return x.ticks(count).map((tick) => (
     <ChartText key={tick} x={x(tick)} y={foot + 18} anchor="middle">
       {formatNumber(tick * 100, 1)}
     </ChartText>

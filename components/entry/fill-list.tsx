@@ -30,7 +30,9 @@ export function FillList({ fills, currency, realised, realisedLabel, renderRemov
                   <Txt size="row" weight="medium" style={{ flexShrink: 1 }}>
                     {`${fillActs[fill.kind]} ${formatMoney(fill.quantity, { places: 0 })} × ${contractWords(fill)}`}
                   </Txt>
-                  <SignedAmount value={fill.cash} currency={currency} size="row" />
+                  <View style={{ flexShrink: 0 }}>
+                    <SignedAmount value={fill.cash} currency={currency} size="row" />
+                  </View>
                 </View>
                 <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 12 }}>
                   <Txt size="note" colour="inkSoft" style={{ flexShrink: 1 }}>

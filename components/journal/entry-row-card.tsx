@@ -35,7 +35,9 @@ export function EntryRowCard({ row, isChosen, showsTrader }: Props) {
           </Txt>
           {` ${row.structureName}`}
         </Txt>
-        <Amount row={row} />
+        <View style={{ flexShrink: 0 }}>
+          <Amount row={row} />
+        </View>
       </View>
       <View
         style={{ flexDirection: 'row', justifyContent: 'space-between', gap: 8, alignItems: 'center', minHeight: 24 }}

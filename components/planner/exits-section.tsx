@@ -3,7 +3,7 @@ import { useFormContext, useWatch } from 'react-hook-form';
 import { PlanField } from '@/components/planner/plan-field';
 import { usePlan } from '@/components/planner/plan-form';
 import { Card } from '@/components/ui/card';
-import { formatInstant, formatSigma } from '@/components/ui/number-format';
+import { formatDate, formatInstant, formatSigma } from '@/components/ui/number-format';
 import { Txt } from '@/components/ui/text';
 import { type Clock } from '@/hooks/client/clock';
 import { type DraftPlan } from '@/shared/entries/draft-plan';
@@ -69,7 +69,7 @@ export function AssumptionsSection({ clock }: { clock: Clock }) {
               ? `Seen ${formatInstant(spotAt, 'America/New_York')} New York`
               : last === undefined
                 ? 'No bars yet: type what you see now.'
-                : `Empty: the close of ${last.sessionDate}.`
+                : `Empty: the close of ${formatDate(last.sessionDate, 'long')}.`
           }
           onAfterChange={(text) => setValue('spotAt', text.trim() === '' ? '' : clock.now(), { shouldDirty: true })}
         />

@@ -40,12 +40,12 @@ export function PlannerColumns({ seal }: { seal: ReactNode }) {
               </Card>
             )}
             <IdeaSection />
+            <SealSection />
           </Column>
           <Column flex={480}>
             <LatticeSection />
             <ExitsSection />
             <AssumptionsSection clock={systemClock} />
-            <SealSection />
           </Column>
         </View>
       </ScrollView>

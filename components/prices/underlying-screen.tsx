@@ -62,6 +62,7 @@ function Underlying({ detail }: { detail: UnderlyingDetail }) {
       />
     </>
   );
+  const typeBar = keepsJournal ? <TypeBarCard detail={detail} /> : null;
   const figures = ladder.length > 0 ? <MoveTable ladder={ladder} /> : null;
   return (
     <ScreenFrame
@@ -131,12 +132,12 @@ function Underlying({ detail }: { detail: UnderlyingDetail }) {
               </View>
               <View style={[{ gap: space.cardGap, minWidth: 0 }, isWide ? { flex: 1 } : null]}>
                 <LadderCard ladder={ladder} />
-                {isWide ? null : figures}
+                {isWide ? typeBar : figures}
               </View>
             </View>
           </>
         )}
-        {keepsJournal ? <TypeBarCard detail={detail} /> : null}
+        {isWide && last !== undefined ? null : typeBar}
         <CautionLine />
       </View>
     </ScreenFrame>

@@ -1,6 +1,6 @@
 import { View } from 'react-native';
-import { CalibrationPlot } from '@/components/charts/calibration-plot';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { CalibrationCard } from '@/components/scores/calibration-card';
 import { ResolvedList } from '@/components/scores/resolved-list';
 import { Card } from '@/components/ui/card';
 import { CautionLine } from '@/components/ui/caution-line';
@@ -69,9 +69,7 @@ function Figures({ scores }: { scores: Scores }) {
       style={isWide ? { flexDirection: 'row', gap: space.columnGap, alignItems: 'flex-start' } : { gap: space.cardGap }}
     >
       <View style={column}>
-        <Card title="Calibration" subtitle="How often each level of odds came true">
-          <CalibrationPlot bins={summary.bins} curve={summary.curve} thinBelow={20} />
-        </Card>
+        <CalibrationCard summary={summary} />
       </View>
       <View style={column}>
         <Card title="Brier score" subtitle="Mean squared distance of the odds from what happened">
