@@ -1,3 +1,5 @@
+const expoWeb = require('jest-expo/web/jest-preset.js');
+
 const transformNode = {
   '(\\.tsx?|\\.mjs|(canonicalize|temporal-polyfill|temporal-utils)/.*\\.js)$': [
     '@swc/jest',
@@ -32,6 +34,10 @@ module.exports = {
     {
       preset: 'jest-expo/web',
       displayName: 'ui',
+      // The preset's own list, with those that ship ES modules only.
+      transformIgnorePatterns: expoWeb.transformIgnorePatterns.map((pattern) =>
+        pattern.replace('(?!(', '(?!(canonicalize|temporal-polyfill|temporal-utils|'),
+      ),
       testMatch: ['<rootDir>/tests/{app,components,hooks}/**/*.test.{ts,tsx}'],
       moduleNameMapper: {
         ...d3,
