@@ -3,10 +3,10 @@ import { View } from 'react-native';
 import { DeskSettingsCard } from '@/components/desk/desk-settings-card';
 import { ProfileCard } from '@/components/desk/profile-card';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { ChoiceRow } from '@/components/ui/choice-row';
-import { ErrorState, LoadingState } from '@/components/ui/states';
 import { DataTable } from '@/components/ui/table';
 import { Txt } from '@/components/ui/text';
 import { space } from '@/components/ui/theme/metrics';
@@ -28,8 +28,8 @@ const roleWords: Record<Role, string> = {
 export function DeskScreen() {
   const { data: me } = useMe();
   const { data: desk, error, isPending, refetch } = useDesk();
-  if (isPending || me === undefined || me === null) return <LoadingState label="Loading desk" />;
-  if (error) return <ErrorState error={error} onRetry={refetch} />;
+  if (isPending || error || me === undefined || me === null)
+    return <UnreadyScreen title="Desk" loading="Loading desk" error={error} onRetry={refetch} />;
   return <DeskBody me={me} desk={desk} />;
 }
 

@@ -8,8 +8,9 @@ import { LessonSection } from '@/components/entry/lesson-section';
 import { OddsOutcomeSection } from '@/components/entry/odds-outcome-section';
 import { SealedPlanSection } from '@/components/entry/sealed-plan-section';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { CautionLine } from '@/components/ui/caution-line';
-import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
+import { EmptyState } from '@/components/ui/states';
 import { space } from '@/components/ui/theme/metrics';
 import { useLayout } from '@/components/ui/use-layout';
 import { useEntry } from '@/hooks/entries/use-entries';
@@ -19,10 +20,10 @@ export function EntryScreen({ entryId }: { entryId: string }) {
   const router = useRouter();
   const { kind: layout } = useLayout();
   const { data: entry, error, isPending, refetch } = useEntry(entryId);
-  if (isPending) return <LoadingState label="Loading entry" />;
-  if (error) return <ErrorState error={error} onRetry={refetch} />;
-
   const back = layout === 'wide' ? undefined : { label: 'Journal', onPress: () => router.navigate('/journal') };
+  if (isPending || error)
+    return <UnreadyScreen title="Entry" back={back} loading="Loading entry" error={error} onRetry={refetch} />;
+
   const title = `${entry.row.underlying.symbol} ${entry.row.structureName}`;
   const { sealed } = entry;
   if (sealed === null) {

@@ -11,7 +11,7 @@ export function JournalLayout({ children }: { children: ReactNode }) {
       title="Journal"
       list={<JournalList chosenId={entryId ?? null} />}
       detail={entryId === undefined ? null : children}
-      placeholder="Choose an entry at the left."
+      placeholder="The entry you choose opens here."
     />
   );
 }

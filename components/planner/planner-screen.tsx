@@ -3,6 +3,7 @@ import { useEffect, useMemo, useState } from 'react';
 import { View } from 'react-native';
 import { FormProvider, useForm, type UseFormReturn } from 'react-hook-form';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { ConflictBanner } from '@/components/planner/conflict-banner';
 import { DiscardButton } from '@/components/planner/discard-button';
 import { PlanContext } from '@/components/planner/plan-form';
@@ -10,7 +11,6 @@ import { PlannerSteps } from '@/components/planner/planner-steps';
 import { PlannerColumns } from '@/components/planner/planner-columns';
 import { SavedNote } from '@/components/planner/saved-note';
 import { SealButton } from '@/components/planner/seal-button';
-import { ErrorState, LoadingState } from '@/components/ui/states';
 import { useLayout } from '@/components/ui/use-layout';
 import { previewPlan } from '@/hooks/entries/preview-plan';
 import { useDraftAutosave } from '@/hooks/entries/use-draft-autosave';
@@ -23,15 +23,15 @@ import { type UnderlyingDetail } from '@/shared/underlyings/underlying-endpoints
 /** Writes a plan: every change shows its price and odds at once and is saved by itself. */
 export function PlannerScreen({ entryId }: { entryId: string }) {
   const entry = useEntry(entryId);
-  if (entry.isPending) return <LoadingState label="Loading plan" />;
-  if (entry.error) return <ErrorState error={entry.error} onRetry={entry.refetch} />;
+  if (entry.isPending || entry.error)
+    return <UnreadyScreen title="Plan" loading="Loading plan" error={entry.error} onRetry={entry.refetch} />;
   return <PlannerForEntry entry={entry.data} />;
 }
 
 function PlannerForEntry({ entry }: { entry: Entry }) {
   const detail = useUnderlying(entry.plan.underlyingId);
-  if (detail.isPending) return <LoadingState label="Loading prices" />;
-  if (detail.error) return <ErrorState error={detail.error} onRetry={detail.refetch} />;
+  if (detail.isPending || detail.error)
+    return <UnreadyScreen title="Plan" loading="Loading prices" error={detail.error} onRetry={detail.refetch} />;
   return <Planner key={entry.row.id} entry={entry} detail={detail.data} />;
 }
 

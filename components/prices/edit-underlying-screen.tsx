@@ -1,7 +1,7 @@
 import { useRouter } from 'expo-router';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { UnderlyingForm } from '@/components/prices/underlying-form';
-import { ErrorState, LoadingState } from '@/components/ui/states';
 import { useEditUnderlying, useUnderlying } from '@/hooks/underlyings/use-underlyings';
 
 /** Changes what is known of an underlying; sealed forecasts keep what they were made with. */
@@ -9,8 +9,8 @@ export function EditUnderlyingScreen({ underlyingId }: { underlyingId: string })
   const router = useRouter();
   const edit = useEditUnderlying();
   const { data: detail, error, isPending, refetch } = useUnderlying(underlyingId);
-  if (isPending) return <LoadingState label="Loading underlying" />;
-  if (error) return <ErrorState error={error} onRetry={refetch} />;
+  if (isPending || error)
+    return <UnreadyScreen title="Edit underlying" loading="Loading underlying" error={error} onRetry={refetch} />;
   const { id: _, version, ...initial } = detail.underlying;
   const back = () => router.navigate({ pathname: '/prices/[underlyingId]', params: { underlyingId } });
   return (

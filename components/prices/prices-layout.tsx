@@ -12,7 +12,7 @@ export function PricesLayout({ children }: { children: ReactNode }) {
       title="Prices"
       list={<PricesList chosenId={underlyingId ?? null} />}
       detail={isList ? null : children}
-      placeholder="Choose an underlying at the left."
+      placeholder="The underlying you choose opens here."
     />
   );
 }

@@ -4,6 +4,7 @@ import { View } from 'react-native';
 import { ClosesChart } from '@/components/charts/closes-chart';
 import { VolatilityLadder } from '@/components/charts/volatility-ladder';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { MoveTable } from '@/components/prices/move-table';
 import { TypeBarCard } from '@/components/prices/type-bar-card';
 import { Banner } from '@/components/ui/banner';
@@ -11,7 +12,7 @@ import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { CautionLine } from '@/components/ui/caution-line';
 import { formatDate, formatPercent } from '@/components/ui/number-format';
-import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
+import { EmptyState, ErrorState } from '@/components/ui/states';
 import { Txt } from '@/components/ui/text';
 import { space } from '@/components/ui/theme/metrics';
 import { useLayout } from '@/components/ui/use-layout';
@@ -30,8 +31,8 @@ const HEADLINE_WINDOW = 21;
 /** One underlying: how much it moves in a session, by every window, with the closes it rests on. */
 export function UnderlyingScreen({ underlyingId }: { underlyingId: string }) {
   const { data: detail, error, isPending, refetch } = useUnderlying(underlyingId);
-  if (isPending) return <LoadingState label="Loading underlying" />;
-  if (error) return <ErrorState error={error} onRetry={refetch} />;
+  if (isPending || error)
+    return <UnreadyScreen title="Underlying" loading="Loading underlying" error={error} onRetry={refetch} />;
   return <Underlying detail={detail} />;
 }
 

@@ -3,11 +3,11 @@ import { useRouter } from 'expo-router';
 import { useState } from 'react';
 import { View } from 'react-native';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { UploadPreview } from '@/components/prices/upload-preview';
 import { Banner } from '@/components/ui/banner';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
-import { ErrorState, LoadingState } from '@/components/ui/states';
 import { Txt } from '@/components/ui/text';
 import { space } from '@/components/ui/theme/metrics';
 import { useUploadPrices } from '@/hooks/prices/use-price-upload';
@@ -32,8 +32,8 @@ export function UploadScreen({ underlyingId }: { underlyingId: string }) {
   const { data: detail, error, isPending, refetch } = useUnderlying(underlyingId);
   const [uploadId, setUploadId] = useState<string | null>(null);
   const [tooLarge, setTooLarge] = useState<string | null>(null);
-  if (isPending) return <LoadingState label="Loading underlying" />;
-  if (error) return <ErrorState error={error} onRetry={refetch} />;
+  if (isPending || error)
+    return <UnreadyScreen title="Upload" loading="Loading underlying" error={error} onRetry={refetch} />;
   const { symbol } = detail.underlying;
   const back = () => router.navigate({ pathname: '/prices/[underlyingId]', params: { underlyingId } });
 

@@ -1,11 +1,12 @@
 import { View } from 'react-native';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { CalibrationCard } from '@/components/scores/calibration-card';
 import { ResolvedList } from '@/components/scores/resolved-list';
 import { Card } from '@/components/ui/card';
 import { CautionLine } from '@/components/ui/caution-line';
 import { formatPercent } from '@/components/ui/number-format';
-import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
+import { EmptyState } from '@/components/ui/states';
 import { DataTable } from '@/components/ui/table';
 import { Txt } from '@/components/ui/text';
 import { space } from '@/components/ui/theme/metrics';
@@ -16,8 +17,8 @@ import { type Scores } from '@/shared/scores/score-endpoints';
 /** Whether the odds come true: a sentence first, then the curve, the parts of the score, and every resolved forecast. */
 export function ScoresScreen() {
   const { data: scores, error, isPending, refetch } = useScores();
-  if (isPending) return <LoadingState label="Loading scores" />;
-  if (error) return <ErrorState error={error} onRetry={refetch} />;
+  if (isPending || error)
+    return <UnreadyScreen title="Scores" loading="Loading scores" error={error} onRetry={refetch} />;
   const pending = `${scores.pendingCount} still to resolve${scores.lateCount > 0 ? `, ${scores.lateCount} sealed late and kept apart` : ''}`;
   return (
     <ScreenFrame title="Scores" note={`${scores.count} resolved, ${pending}`}>
@@ -26,6 +27,7 @@ export function ScoresScreen() {
           <EmptyState
             title="No odds are resolved yet"
             text="Each sealed forecast states several odds. They resolve at the planned exit and at expiry, once the bars are there."
+            action={{ label: 'See the journal', href: '/journal' }}
           />
         ) : (
           <>

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { View } from 'react-native';
 import { SessionsAhead } from '@/components/charts/sessions-ahead';
 import { ScreenFrame } from '@/components/frame/screen-frame';
+import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { EntryRowCard } from '@/components/journal/entry-row-card';
 import { TaskRow } from '@/components/today/task-row';
 import { sessionsAhead } from '@/components/today/sessions-ahead-rows';
@@ -10,7 +11,7 @@ import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { CautionLine } from '@/components/ui/caution-line';
 import { formatDate } from '@/components/ui/number-format';
-import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
+import { EmptyState } from '@/components/ui/states';
 import { Heading, Txt } from '@/components/ui/text';
 import { radius, space } from '@/components/ui/theme/metrics';
 import { useColours } from '@/components/ui/theme/use-theme';
@@ -31,8 +32,8 @@ export function TodayScreen() {
   const keepsJournal = useKeepsJournal();
   const isPhone = useLayout().kind === 'phone';
   const { data: today, error, isPending, refetch } = useToday();
-  if (isPending) return <LoadingState label="Loading today" />;
-  if (error) return <ErrorState error={error} onRetry={refetch} />;
+  if (isPending || error)
+    return <UnreadyScreen title="Today" loading="Loading today" error={error} onRetry={refetch} />;
   return (
     <ScreenFrame
       title="Today"

@@ -30,7 +30,7 @@ async function show(tasks: TodayTask[]) {
   };
   setWidth(390);
   renderScreen(<TodayScreen />, { 'GET /today': today, 'GET /account/me': sampleMe });
-  await screen.findByRole('heading', { level: 1, name: 'Today' });
+  await screen.findByRole('heading', { name: 'How your odds are doing' });
 }
 
 const entry = { kind: 'entry', entryId: ids.entry, section: 'plan' } as const;
@@ -67,6 +67,6 @@ describe('Today', () => {
 
   it('says so when nothing waits', async () => {
     await show([]);
-    expect(screen.getByText('Nothing waits for you')).toBeTruthy();
+    expect(await screen.findByText('Nothing waits for you')).toBeTruthy();
   });
 });
