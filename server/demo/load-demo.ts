@@ -1,7 +1,12 @@
 import { type DataSource } from 'typeorm';
 import { closeDailyVolatility } from '@/journal/volatility/close-daily-volatility';
 import { logReturns } from '@/journal/returns/log-returns';
-import { countSessions, type ExchangeSession, sessionsInRange } from '@/journal/sessions/exchange-calendar';
+import {
+  countSessions,
+  type ExchangeSession,
+  nextSession,
+  sessionsInRange,
+} from '@/journal/sessions/exchange-calendar';
 import { addDays } from '@/journal/sessions/session-date';
 import { latestCloseAt } from '@/journal/sessions/session-clock';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
@@ -215,18 +220,17 @@ class DemoWriter {
     const demo = planDemoEntry(moment, settings, random, systemIds.next);
     const entryId = systemIds.next();
     const isLate = this.count % 17 === 0;
-    setTime(later(moment.closesAt, isLate ? 1500 : 30));
+    const next = nextSession(usOptionsCalendar, moment.sessionDate);
+    setTime(isLate ? later(next.opensAt, 60) : later(moment.closesAt, 30)); // late: after the fills of the open
     const draft = await services.entries.create(scope, { id: entryId, plan: demo.plan });
     await services.seals.seal(scope, { entryId, version: draft.row.version, requestId: 'demo' });
-    const roll = random.next();
-    const isRecent = moment.market.bars.filter(({ sessionDate }) => sessionDate > moment.sessionDate).length < 4;
-    if (roll < 0.12) {
+    if (this.count % 9 === 5) {
       setTime(later(moment.closesAt, 60 * 24));
       const current = await services.entries.read(scope, entryId);
       await services.entries.abandon(scope, { entryId, version: current.row.version, requestId: 'demo' });
       return;
     }
-    if (roll < 0.18 && isRecent) return; // sealed and not yet traded
+    if (this.count === ENTRIES) return; // sealed and not yet traded
     await this.trade(entryId, moment, demo);
   }
 
