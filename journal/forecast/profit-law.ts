@@ -134,7 +134,7 @@ function rangeBelow({ from, to, intercept, slope }: PayoffSegment, amount: numbe
 
 function shareBelow(segment: WeighedSegment, amount: number, price: LognormalPrice, includesAmount: boolean): number {
   if (segment.most < amount || (includesAmount && segment.most === amount)) return segment.probability;
-  if (segment.least > amount || segment.slope === 0) return 0;
+  if (segment.least >= amount || segment.slope === 0) return 0;
   const [from, to] = rangeBelow(segment, amount);
   return between(boundaryAt(from, price).count, boundaryAt(to, price).count);
 }

@@ -17,7 +17,7 @@ import { realisedVolatility, volatilityRatioRange } from '@/journal/outcome/real
 import { answerOdds, settlementValue } from '@/journal/outcome/resolve-odds';
 import { brierScore } from '@/journal/scoring/brier-score';
 import { clippedLogScore } from '@/journal/scoring/log-score';
-import { type ExchangeCalendar, sessionsInRange } from '@/journal/sessions/exchange-calendar';
+import { type ExchangeCalendar, nextSession, sessionsInRange } from '@/journal/sessions/exchange-calendar';
 import { instantMilliseconds } from '@/journal/sessions/instant';
 import { sessionEndingAfter, sessionsBetween } from '@/journal/sessions/session-clock';
 
@@ -35,6 +35,7 @@ export function resolveEntry(question: OutcomeQuestion, calendar: ExchangeCalend
   const model = planModel(input, planHorizon(input, calendar));
   const isFinal = fills.length > 0 && isFlat(fills);
   const profit = profitOutcome(model, fills, isFinal);
+  const afterExit = nextSession(calendar, forecast.exitSessionDate);
   const first = sessionEndingAfter(calendar, instantMilliseconds(input.spot.at));
   const context = {
     model,
@@ -42,7 +43,10 @@ export function resolveEntry(question: OutcomeQuestion, calendar: ExchangeCalend
     watchedSessionDates: sessionsInRange(calendar, { from: first.date, through: forecast.exitSessionDate }).map(
       ({ date }) => date,
     ),
-    finalProfit: isFinal && profit !== null ? toModelNumber(profit.realised) : null,
+    profitByExit:
+      profit !== null && isFinal && fills.every(({ tradedAt }) => tradedAt < afterExit.opensAt)
+        ? toModelNumber(profit.realised)
+        : null,
     startsInsideSession: first.opensAt < input.spot.at,
   };
   const odds = forecast.odds.map((stated): ResolvedOdds => {

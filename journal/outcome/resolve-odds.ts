@@ -14,8 +14,8 @@ export interface AnswerContext {
   readonly barsSince: readonly OutcomeBar[];
   /** Sessions from the one of the spot price through the planned exit. */
   readonly watchedSessionDates: readonly string[];
-  /** Profit after fees once the position is flat; null before. */
-  readonly finalProfit: number | null;
+  /** Profit after fees of a position that was flat before the session after the planned exit; else null. */
+  readonly profitByExit: number | null;
   /** True when the spot price was seen inside the first watched session, whose range began before it. */
   readonly startsInsideSession: boolean;
 }
@@ -29,8 +29,8 @@ const known = (happened: boolean, monitoredBy: 'range' | 'closes' | null = null)
 /**
  * Resolves a stated probability from official values.
  * Odds to expiry resolve at expiry by the settlement value, even when the trade was closed earlier: resolving only what was
- * held would bias the record. Profit at the planned exit is that of the closed trade, and for a plan that was not traded, or is
- * still open then, the model's at the exit session's close.
+ * held would bias the record. Profit at the planned exit is that of the trade closed by then, and for a plan that was not traded,
+ * or was still open, the model's at the exit session's close; what is done later changes no answer.
  * @see scoring at the stated horizon: common practice; Brier (1950) asks for events fixed beforehand.
  */
 export function answerOdds({ event, dueSessionDate }: StatedOdds, context: AnswerContext): Answer {
@@ -46,7 +46,7 @@ export function answerOdds({ event, dueSessionDate }: StatedOdds, context: Answe
       return value === null ? waitForSettlement(context) : known(payoffAt(context.model.payoff, value) > 0);
     }
     case 'profit-at-exit': {
-      if (context.finalProfit !== null) return known(context.finalProfit > 0);
+      if (context.profitByExit !== null) return known(context.profitByExit > 0);
       const bar = barOn(context, dueSessionDate);
       return bar === null
         ? { kind: 'waiting', waitsFor: `the close of ${dueSessionDate}` }

@@ -43,6 +43,10 @@ export function readPlan({ draft, underlying, bars, calendar }: PlanContext): Pl
   readNumber(report, 'feePerContract', draft.feePerContract, { name: 'The fee', least: 0 });
   const targetPrice = readLevel('targetPrice', draft.targetPrice, 'The target', report);
   const stopPrice = readLevel('stopPrice', draft.stopPrice, 'The stop', report);
+  for (const [field, level] of Object.entries({ targetPrice, stopPrice })) {
+    if (level !== null && spot !== null && Number(level) === Number(spot.price))
+      report(field, 'The price is at this level already. Choose another one, or leave it empty.');
+  }
   const expectedReturn = readExpectedReturn(draft, report);
 
   if (

@@ -1,5 +1,10 @@
 import { expiryPayoff } from '@/journal/contracts/expiry-payoff';
+import { type ForecastInput } from '@/journal/forecast/forecast-input';
+import { planHorizon } from '@/journal/forecast/plan-horizon';
+import { lawAt, planModel, profitAtExit } from '@/journal/forecast/plan-model';
 import { profitLaw } from '@/journal/forecast/profit-law';
+import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
+import { longCall } from '@/tests/journal/forecast/plan-examples';
 import { seededRandom } from '@/server/demo/seeded-random';
 
 const price = { spotPrice: 100, logDrift: -0.001125, totalDeviation: 0.0474 };
@@ -55,5 +60,32 @@ describe('the law of a profit at expiry', () => {
     const lumped = law.lumps.reduce((sum, { probability }) => sum + probability, 0);
     const between = law.below(120) - law.atOrBelow(-280);
     expect(lumped + between).toBeCloseTo(1, 12);
+  });
+});
+
+describe('the law of a profit at an exit just before expiry', () => {
+  // Independent: the profit averaged over the worst 5 % of a fine grid of normal deviates.
+  it.each([1, 5, 9, 9.9])('has the expected shortfall of a sum over moves after %d of 10 sessions', (sessions) => {
+    const input: ForecastInput = {
+      ...longCall,
+      legs: longCall.legs.map((leg) => ({ ...leg, quantity: 5 })),
+      holding: { kind: 'sessions', sessions },
+    };
+    const model = planModel(input, planHorizon(input, usOptionsCalendar));
+    const profitAt = profitAtExit(model);
+    const deviation = 0.015 * Math.sqrt(sessions);
+    const nodes = Array.from({ length: 100_001 }, (_, index) => -8 + (16 * index) / 100_000).map((z) => ({
+      profit: profitAt(100 * Math.exp(deviation * z - deviation ** 2 / 2)),
+      weight: Math.exp((-z * z) / 2),
+    }));
+    const whole = nodes.reduce((sum, { weight }) => sum + weight, 0);
+    let left = 0.05;
+    let shortfall = 0;
+    for (const { profit, weight } of nodes.sort((one, other) => one.profit - other.profit)) {
+      const share = Math.min(weight / whole, left);
+      shortfall += (share * profit) / 0.05;
+      left -= share;
+    }
+    expect(Math.abs(lawAt(model, 'exit', 0.015, input.drift).expectedShortfall(0.05) - shortfall)).toBeLessThan(0.5);
   });
 });

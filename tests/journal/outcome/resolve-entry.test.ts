@@ -147,7 +147,7 @@ describe('scenario 3, the bull put that was bought back at half', () => {
 });
 
 describe('test D, five calls sold after three sessions', () => {
-  // FIELD.md 6.3: bought 1.10, sold 1.75, fees 6.65: +318.35; look: 102.50 is +0.95 sigmas.
+  // By hand: 5 × 100 × (1.75 − 1.10) − 6.65 = 318.35; ln(102.5 / 100) / (0.015·√3) = 0.95.
   const input: ForecastInput = {
     ...longCall,
     legs: longCall.legs.map((leg) => ({ ...leg, quantity: 5, premium: '1.08' })),
@@ -171,7 +171,7 @@ describe('test D, five calls sold after three sessions', () => {
 
   it('realises 318.35, in the upper fifth of its forecast', () => {
     expect(outcome.profit?.realised).toBe('318.35');
-    expect(outcome.profit?.percentileLow).toBeCloseTo(0.81, 1);
+    expect(outcome.profit?.percentileLow).toBeCloseTo(0.804, 3);
   });
 
   it('landed at +0.95 sigmas after 3 sessions', () => {
@@ -187,6 +187,32 @@ describe('test D, five calls sold after three sessions', () => {
       'touch-target': true,
       'touch-stop': false,
     });
+  });
+});
+
+describe('a trade still open at its planned exit', () => {
+  const input: ForecastInput = { ...longCall, holding: { kind: 'sessions', sessions: 3 } };
+  const closes = [
+    bar('2026-12-10', 100),
+    bar('2026-12-11', 99),
+    bar('2026-12-14', 98),
+    bar('2026-12-15', 103),
+    bar('2026-12-16', 106),
+  ];
+  const soldAt = (tradedAt: string) => [
+    fillOf(input, 0, { kind: 'buy', quantity: '1', fees: '0.65', price: '1.20', tradedAt: '2026-12-10T15:00:00.000Z' }),
+    fillOf(input, 0, { kind: 'sell', quantity: '1', fees: '0.65', price: '4.40', tradedAt }),
+  ];
+  const answerOf = (fills: Parameters<typeof resolve>[2]) =>
+    resolve(input, closes, fills).odds.find(({ odds }) => odds.key === 'profit-at-exit')?.happened;
+
+  it('keeps the answer of that close, whatever it is sold for later', () => {
+    expect(answerOf(soldAt('2026-12-10T15:00:00.000Z').slice(0, 1))).toBe(false);
+    expect(answerOf(soldAt('2026-12-16T20:00:00.000Z'))).toBe(false);
+  });
+
+  it('is answered by its own profit when it was sold on the day of the exit', () => {
+    expect(answerOf(soldAt('2026-12-14T20:58:00.000Z'))).toBe(true);
   });
 });
 

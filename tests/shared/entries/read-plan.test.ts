@@ -99,6 +99,12 @@ describe('readPlan', () => {
     ],
     ['a hold of no number', { holding: 'sessions', holdingSessions: '' }, 'holdingSessions', /missing/],
     ['a negative target', { targetPrice: '-1' }, 'targetPrice', /above 0/],
+    [
+      'a stop where the price is',
+      { spotPrice: '101', spotAt: '2026-12-09T21:00:00.000Z', stopPrice: '101.0' },
+      'stopPrice',
+      /already/,
+    ],
     ['an overnight share above 100%', { overnightSharePercent: '101' }, 'overnightSharePercent', /100 or less/],
     ['a price without its time', { spotPrice: '101' }, 'spotAt', /when/],
     [
