@@ -11,7 +11,15 @@ mkdirSync(folder, { recursive: true });
 
 const browser = await chromium.launch({
   executablePath: '/usr/bin/chromium',
-  args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'],
+  args: [
+    '--no-sandbox',
+    '--disable-gpu',
+    '--disable-quic',
+    '--no-first-run',
+    '--disable-background-networking',
+    '--disable-component-update',
+    '--disable-sync',
+  ],
 });
 const problems = [];
 try {
@@ -27,7 +35,10 @@ process.exitCode = problems.length > 0 ? 1 : 0;
 async function tour(size, viewport, colorScheme) {
   const context = await browser.newContext({ viewport, colorScheme, reducedMotion: 'reduce' });
   const page = await context.newPage();
-  page.on('console', (message) => message.type() === 'error' && problems.push(`${size} ${page.url()}: ${message.text()}`));
+  page.on(
+    'console',
+    (message) => message.type() === 'error' && problems.push(`${size} ${page.url()}: ${message.text()}`),
+  );
   page.on('pageerror', (error) => problems.push(`${size} ${page.url()}: ${error.message}`));
   const shoot = async (name) => {
     await page.evaluate(() => document.fonts.ready);
@@ -48,7 +59,9 @@ async function tour(size, viewport, colorScheme) {
   const { entries } = await get('/entries?limit=200');
   const { underlyings } = await get('/underlyings');
   const draft = entries.find(({ state }) => state === 'draft');
-  const reviewed = entries.find(({ state, strip }) => state === 'reviewed' && strip.target !== null) ?? entries.find(({ state }) => state === 'reviewed');
+  const reviewed =
+    entries.find(({ state, strip }) => state === 'reviewed' && strip.target !== null) ??
+    entries.find(({ state }) => state === 'reviewed');
   const stops = [
     ['03-journal', '/journal', 'Journal'],
     ['05-entry', `/journal/${reviewed.id}`, reviewed.underlying.symbol],
@@ -66,7 +79,11 @@ async function tour(size, viewport, colorScheme) {
     await shoot(name);
     if (name === '04-planner' && size === 'phone') {
       for (const [index, step] of ['Structure', 'Odds', 'Exits', 'Seal'].entries()) {
-        await page.getByRole('tab', { name: new RegExp(step) }).or(page.getByRole('button', { name: new RegExp(`^${step}`) })).first().click();
+        await page
+          .getByRole('tab', { name: new RegExp(step) })
+          .or(page.getByRole('button', { name: new RegExp(`^${step}`) }))
+          .first()
+          .click();
         await shoot(`04-planner-${index + 2}-${step.toLowerCase()}`);
       }
     }
