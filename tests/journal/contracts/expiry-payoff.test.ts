@@ -15,7 +15,7 @@ interface Row {
   readonly breakEvens: readonly number[];
 }
 
-// The table of FIELD.md 3.4 (Hull; Natenberg; common practice) with numbers put in: D or C = 2, strikes around 100, S0 = 100.
+// The table of break-evens and ends (Hull; Natenberg; common practice) with numbers put in: D or C = 2, strikes around 100, S0 = 100.
 const table: readonly Row[] = [
   { name: 'long call', legs: [call(100)], cost: 2, gain: null, loss: -2, breakEvens: [102] },
   { name: 'long put', legs: [put(100)], cost: 2, gain: 98, loss: -2, breakEvens: [98] },

@@ -13,7 +13,7 @@ const oddsOf = (input: ForecastInput, key: string) => {
 };
 const callKey = `in-the-money:${longCall.legs[0]?.id ?? ''}`;
 
-// Worked values of FIELD.md (computed outside this project with Python): tests A and C, 2.4 and 3.2.
+// Worked values, computed outside this project with Python.
 describe('the long 102 call of tests A and C', () => {
   it('counts ten sessions and fourteen days', () => {
     const { sessions, years, exitSessionDate } = forecastOf(longCall);
@@ -129,7 +129,7 @@ describe('a plan that exits before expiry', () => {
 });
 
 describe('scenario 1, a same-day index call', () => {
-  // FIELD.md 9.1: 12:30 New York, ZZIX 4000, 0.90 % a session, 4010 call at 4.20, fee 1.17.
+  // Worked outside this project: 12:30 New York, ZZIX 4000, 0.90 % a session, 4010 call at 4.20, fee 1.17.
   const sameDay: ForecastInput = {
     ...longCall,
     underlying: { ...longCall.underlying, symbol: 'ZZIX' },

@@ -35,7 +35,7 @@ function fillOf(
 }
 
 describe('scenario 1, the same-day index call that settles at 4021.50', () => {
-  // FIELD.md 9.1: P&L +728.83, z 0.970, event yes, Brier .456.
+  // Worked outside this project: P&L +728.83, z 0.970, event yes, Brier .456.
   const input: ForecastInput = {
     ...longCall,
     underlying: { ...longCall.underlying, symbol: 'ZZIX' },
@@ -78,7 +78,7 @@ describe('scenario 1, the same-day index call that settles at 4021.50', () => {
 });
 
 describe('scenario 3, the bull put that was bought back at half', () => {
-  // FIELD.md 9.3: WUVZ 60, 1.3 %, 21 sessions; sold 57 put, bought 55 put, credit 0.52, bought back 0.26, fees 1.32 each way:
+  // Worked outside this project: WUVZ 60, 1.3 %, 21 sessions; sold 57 put, bought 55 put, credit 0.52, bought back 0.26, fees 1.32 each way:
   // +23.36; expiry 58.10, 57 put in the money 20.3 %, event no, Brier .0412.
   const input: ForecastInput = {
     ...longCall,

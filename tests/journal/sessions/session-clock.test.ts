@@ -9,7 +9,7 @@ const winter = (date: string, time: string) => new Date(`${date}T${time}:00-05:0
 const summer = (date: string, time: string) => new Date(`${date}T${time}:00-04:00`).toISOString();
 const between = (from: string, to: string) => sessionsBetween({ calendar, from, to, settings });
 
-// Worked values of FIELD.md 2.3 and scenario 7, computed outside this project with Python.
+// Worked values computed outside this project with Python.
 describe('the session clock', () => {
   it('counts 2.3231 from Tuesday 13:00 to Thursday’s close', () => {
     expect(between(winter('2026-12-08', '13:00'), winter('2026-12-10', '16:00'))).toBeCloseTo(2.3231, 4);
@@ -61,7 +61,7 @@ describe('the session clock', () => {
     expect(latestCloseAt({ calendar, at: winter('2026-12-09', '15:59') }).date).toBe('2026-12-08');
   });
 
-  // Holidays of the exchange’s notice, as FIELD.md 4.4 lists them.
+  // Holidays of the exchange’s notice.
   it.each([
     '2026-01-01',
     '2026-01-19',
