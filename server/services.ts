@@ -10,6 +10,7 @@ import { DeskScopes } from '@/server/database/desk-scope';
 import { deskHandlers } from '@/server/desk/desk-handlers';
 import { DeskService } from '@/server/desk/desk-service';
 import { DeskStore } from '@/server/desk/desk-store';
+import { EngineService } from '@/server/engine/engine-service';
 import { EntryDescriber } from '@/server/entries/describe-entry';
 import { entryHandlers } from '@/server/entries/entry-handlers';
 import { EntryService } from '@/server/entries/entry-service';
@@ -62,6 +63,7 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
   const seals = new SealService({ clock, ids, outcomes });
   const fills = new FillService({ clock, ids, outcomes });
   const scores = new ScoreService(describer);
+  const engine = new EngineService();
   const today = new TodayService({ clock, entries, underlyings, scores });
 
   const handlers: HandlersOf<typeof allEndpoints> = {
@@ -72,6 +74,8 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
     ...entryHandlers({ entries, seals, fills }),
     readToday: ({ scope }) => today.read(scope),
     readScores: ({ scope }) => scores.read(scope),
+    computeCases: ({ person, params, body }) =>
+      engine.compute(person.id, { command: params.command, cases: body.cases }),
   };
   return {
     me,
@@ -84,6 +88,8 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
     scopes,
     sessionStore: new SessionStore(dataSource, clock),
     handlers,
-    close: () => hasher.close(),
+    close: async () => {
+      await Promise.all([hasher.close(), engine.close()]);
+    },
   };
 }

@@ -1,6 +1,7 @@
 import { Piscina } from 'piscina';
 import { ApiFailure } from '@/server/errors/api-failure';
 import { type PasswordTask } from '@/server/account/password-hash-worker';
+import { bundledWorker } from '@/server/runtime/bundled-worker';
 import { pepperedPassword } from '@/server/runtime/secrets';
 
 const MOST_AT_ONCE = 2;
@@ -20,7 +21,7 @@ export class PasswordHasher {
 
   constructor(private readonly settings: HashSettings) {
     this.pool = new Piscina({
-      filename: workerFile().href,
+      filename: bundledWorker('account/password-hash-worker.js').href,
       maxThreads: MOST_AT_ONCE,
       minThreads: 1,
       maxQueue: MOST_WAITING,
@@ -66,13 +67,4 @@ export class PasswordHasher {
       throw new TypeError('A password task gives text or a truth value.');
     return result;
   }
-}
-
-/** The bundled worker: beside the bundle in production, and in the same place when the source runs by itself under test. */
-function workerFile(): URL {
-  const isSource = import.meta.url.endsWith('.ts');
-  return new URL(
-    isSource ? '../../build/server/account/password-hash-worker.js' : './account/password-hash-worker.js',
-    import.meta.url,
-  );
 }

@@ -13,7 +13,7 @@ import { type PriceUploadEntity } from '@/server/prices/price-upload-entity';
 import { PriceUploadStore } from '@/server/prices/price-upload-store';
 import { type PriceFileContent, type SettledReading } from '@/server/prices/reading/interpret-table';
 import { PriceFileError } from '@/server/prices/reading/price-file-error';
-import { QueueFullError, ReadingQueue } from '@/server/prices/reading-queue';
+import { QueueFullError, TurnQueue } from '@/server/runtime/turn-queue';
 import { type Clock } from '@/server/runtime/clock';
 import { type Ids } from '@/server/runtime/ids';
 import { UnderlyingStore } from '@/server/underlyings/underlying-store';
@@ -36,7 +36,7 @@ interface ReadingRequest {
 }
 
 export class PriceUploadService {
-  private readonly queue = new ReadingQueue({ atOnce: 2, waiting: 20 });
+  private readonly queue = new TurnQueue({ atOnce: 2, waiting: 20 });
 
   constructor(
     private readonly deps: { readonly clock: Clock; readonly ids: Ids; readonly onBarsChanged: OnBarsChanged },

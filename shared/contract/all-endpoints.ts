@@ -1,5 +1,6 @@
 import { accountEndpoints } from '@/shared/account/account-endpoints';
 import { deskEndpoints } from '@/shared/desk/desk-endpoints';
+import { engineEndpoints } from '@/shared/engine/engine-endpoints';
 import { entryEndpoints } from '@/shared/entries/entry-endpoints';
 import { priceUploadEndpoints } from '@/shared/prices/price-upload-endpoints';
 import { scoreEndpoints } from '@/shared/scores/score-endpoints';
@@ -15,4 +16,5 @@ export const allEndpoints = {
   ...entryEndpoints,
   ...todayEndpoints,
   ...scoreEndpoints,
+  ...engineEndpoints,
 };

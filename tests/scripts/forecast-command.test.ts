@@ -1,4 +1,4 @@
-import { forecastCommand } from '@/server/cli/engine-commands/forecast-command';
+import { forecastCommand } from '@/server/engine/commands/forecast-command';
 import { makeForecast } from '@/journal/forecast/make-forecast';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
 import { longCall } from '@/tests/journal/forecast/plan-examples';

@@ -28,7 +28,7 @@ export async function sampleRows(owner: TestPerson): Promise<SampleRows> {
 
 /** The address of an endpoint with its ids filled in; ids that are not there yet are new ones. */
 export function samplePath({ path }: Endpoint, rows: SampleRows): string {
-  const known: Record<string, string> = { ...rows, sessionDate: '2026-12-08' };
+  const known: Record<string, string> = { ...rows, sessionDate: '2026-12-08', command: 'symbol' };
   return path.replace(/:(\w+)/g, (_, name: string) => known[name] ?? randomUUID());
 }
 
@@ -42,6 +42,7 @@ const account = (): object => ({
 /** A body each endpoint takes, by its name. */
 const bodies: Readonly<Record<string, (rows: SampleRows) => object>> = {
   signUp: account,
+  computeCases: () => ({ cases: [7] }), // what a case may hold is told in its answer
   acceptInvitation: () => ({ ...account(), token: 'no invitation has this token', deskName: 'Desk' }),
   signIn: () => ({ email: 'nobody@example.org', password: 'not the password of anyone' }),
   switchDesk: ({ deskId }) => ({ deskId }),

@@ -1,4 +1,4 @@
-import { QueueFullError, ReadingQueue } from '@/server/prices/reading-queue';
+import { QueueFullError, TurnQueue } from '@/server/runtime/turn-queue';
 
 const gate = () => {
   let open: () => void = () => undefined;
@@ -11,7 +11,7 @@ const settled = () => new Promise((resolve) => setImmediate(resolve));
 
 describe('the queue of files to be read', () => {
   it('runs two at once, one of a person, and starts the next in order', async () => {
-    const queue = new ReadingQueue({ atOnce: 2, waiting: 10 });
+    const queue = new TurnQueue({ atOnce: 2, waiting: 10 });
     const started: string[] = [];
     const gates = { a1: gate(), a2: gate(), b1: gate(), c1: gate() };
     const runs = Object.entries(gates).map(([name, { passed }]) =>
@@ -34,7 +34,7 @@ describe('the queue of files to be read', () => {
   });
 
   it('gives its place up when a reading fails, and refuses when too many wait', async () => {
-    const queue = new ReadingQueue({ atOnce: 1, waiting: 1 });
+    const queue = new TurnQueue({ atOnce: 1, waiting: 1 });
     await expect(queue.run('a', () => Promise.reject(new Error('bad file')))).rejects.toThrow('bad file');
     const first = gate();
     const running = queue.run('a', () => first.passed);

@@ -5,8 +5,8 @@ interface Waiting {
 
 export class QueueFullError extends Error {}
 
-/** Lets few files be read at a time, and of one person one; the others wait in order. */
-export class ReadingQueue {
+/** Lets few demanding tasks run at a time, and of one person one; the others wait in order. */
+export class TurnQueue {
   private readonly runningFor = new Set<string>();
   private readonly waiting: Waiting[] = [];
 

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { DomainError } from '@/journal/errors/domain-error';
 import { estimateVolatility } from '@/journal/volatility/estimate-volatility';
 import { type VolatilityMethod } from '@/journal/volatility/volatility-method';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+import { engineCommand } from '@/server/engine/commands/engine-command';
 
 const barSchema = z.tuple([z.number(), z.number(), z.number(), z.number()]);
 const volatilityCaseSchema = z

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { calibrationCurve } from '@/journal/scoring/calibration-curve';
 import { meanLogScore } from '@/journal/scoring/log-score';
 import { murphyDecomposition } from '@/journal/scoring/murphy-decomposition';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+import { engineCommand } from '@/server/engine/commands/engine-command';
 
 const scoreCaseSchema = z.strictObject({
   forecasts: z.array(z.number()),

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { DomainError } from '@/journal/errors/domain-error';
 import { oddsBeyondLevel } from '@/journal/odds/odds-beyond-level';
 import { touchOdds } from '@/journal/odds/touch-odds';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+import { engineCommand } from '@/server/engine/commands/engine-command';
 
 const oddsCaseSchema = z.strictObject({
   spot: z.number(),

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { impliedDailyVolatility } from '@/journal/pricing/implied-daily-volatility';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
-import { optionCaseFields, optionOfCase } from '@/server/cli/engine-commands/option-case';
+import { engineCommand } from '@/server/engine/commands/engine-command';
+import { optionCaseFields, optionOfCase } from '@/server/engine/commands/option-case';
 
 /** Daily volatility of a price; null, with the bound that was broken and its value, for a price that no volatility gives. */
 export const impliedCommand = engineCommand(

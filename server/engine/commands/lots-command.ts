@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { matchLots } from '@/journal/fills/lots';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+import { engineCommand } from '@/server/engine/commands/engine-command';
 
 const instrumentSchema = z.discriminatedUnion('kind', [
   z.strictObject({

@@ -1,6 +1,6 @@
 import { makeForecast } from '@/journal/forecast/make-forecast';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+import { engineCommand } from '@/server/engine/commands/engine-command';
 import { forecastInputSchema } from '@/shared/entries/forecast-schema';
 
 /** A whole plan with its prices: the forecast as the product shows and seals it. */

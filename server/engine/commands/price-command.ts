@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { europeanOptionValue } from '@/journal/pricing/european-option';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
-import { optionCaseFields, optionOfCase } from '@/server/cli/engine-commands/option-case';
+import { engineCommand } from '@/server/engine/commands/engine-command';
+import { optionCaseFields, optionOfCase } from '@/server/engine/commands/option-case';
 
 /** Price, five Greeks and risk-neutral odds of an option. */
 export const priceCommand = engineCommand(

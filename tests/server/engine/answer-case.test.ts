@@ -1,13 +1,13 @@
-import { answerLine } from '@/server/cli/engine-commands/answer-line';
-import { type EngineCommand } from '@/server/cli/engine-commands/engine-command';
-import { impliedCommand } from '@/server/cli/engine-commands/implied-command';
-import { lotsCommand } from '@/server/cli/engine-commands/lots-command';
-import { oddsCommand } from '@/server/cli/engine-commands/odds-command';
-import { priceCommand } from '@/server/cli/engine-commands/price-command';
-import { scoreCommand } from '@/server/cli/engine-commands/score-command';
-import { sessionsCommand } from '@/server/cli/engine-commands/sessions-command';
-import { symbolCommand } from '@/server/cli/engine-commands/symbol-command';
-import { volatilityCommand } from '@/server/cli/engine-commands/volatility-command';
+import { answerLine } from '@/server/engine/answer-case';
+import { type EngineCommand } from '@/server/engine/commands/engine-command';
+import { impliedCommand } from '@/server/engine/commands/implied-command';
+import { lotsCommand } from '@/server/engine/commands/lots-command';
+import { oddsCommand } from '@/server/engine/commands/odds-command';
+import { priceCommand } from '@/server/engine/commands/price-command';
+import { scoreCommand } from '@/server/engine/commands/score-command';
+import { sessionsCommand } from '@/server/engine/commands/sessions-command';
+import { symbolCommand } from '@/server/engine/commands/symbol-command';
+import { volatilityCommand } from '@/server/engine/commands/volatility-command';
 
 function resultOf(command: EngineCommand, input: unknown): Record<string, unknown> {
   const { text, isRefused } = answerLine(command, JSON.stringify(input), 1);

@@ -4,7 +4,7 @@ import { countSessions } from '@/journal/sessions/exchange-calendar';
 import { sessionsBetween } from '@/journal/sessions/session-clock';
 import { isSessionDate } from '@/journal/sessions/session-date';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+import { engineCommand } from '@/server/engine/commands/engine-command';
 
 const sessionsCaseSchema = z.strictObject({
   from: z.string(),

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { decodeOptionSymbol, encodeOptionSymbol } from '@/journal/contracts/option-symbol';
-import { engineCommand } from '@/server/cli/engine-commands/engine-command';
+import { engineCommand } from '@/server/engine/commands/engine-command';
 
 const symbolCaseSchema = z.union([
   z.strictObject({ symbol: z.string() }),

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { DomainError } from '@/journal/errors/domain-error';
-import { type EngineCommand } from '@/server/cli/engine-commands/engine-command';
+import { type EngineCommand } from '@/server/engine/commands/engine-command';
 
 export interface AnsweredLine {
   /** One line of JSON. */
@@ -13,10 +13,22 @@ export interface AnsweredLine {
  * @param lineNumber counted from 1.
  */
 export function answerLine(command: EngineCommand, line: string, lineNumber: number): AnsweredLine {
+  return answered(() => command(JSON.parse(line)), lineNumber);
+}
+
+/**
+ * The same for a case that is parsed already.
+ * @param caseNumber counted from 1; the answer's `line`.
+ */
+export function answerCase(command: EngineCommand, input: unknown, caseNumber: number): AnsweredLine {
+  return answered(() => command(input), caseNumber);
+}
+
+function answered(compute: () => unknown, line: number): AnsweredLine {
   try {
-    return { text: JSON.stringify(command(JSON.parse(line)), finiteOrNamed), isRefused: false };
+    return { text: JSON.stringify(compute(), finiteOrNamed), isRefused: false };
   } catch (error) {
-    return { text: JSON.stringify({ error: { ...refusalOf(error), line: lineNumber } }), isRefused: true };
+    return { text: JSON.stringify({ error: { ...refusalOf(error), line } }), isRefused: true };
   }
 }
 
