@@ -29,23 +29,38 @@ export function binomialProbabilities({ count, probability }: { count: number; p
   return weights.map((one) => one / total);
 }
 
+/** Less than this in a tail is below the rounding of the sum of the rest. */
+const negligible = 1e-22;
+
 /**
  * Probabilities of 0, 1, ... n events among n independent events of differing probabilities (Poisson binomial), by convolution.
  * @param probabilities each 0 to 1.
+ * @returns exact but for rounding; counts less likely than about 1e-20 may come out as 0.
  * @throws {DomainError} `probability-invalid`.
  */
 export function eventCountProbabilities(probabilities: readonly number[]): number[] {
-  let distribution = [1];
+  const distribution = new Float64Array(probabilities.length + 1);
+  distribution[0] = 1;
+  // Only counts between `low` and `high` still matter: so n events cost about n to the power 1.5 and not n squared.
+  let [low, high] = [0, 0];
   for (const probability of probabilities) {
     requireProbability(probability);
-    const next = new Array<number>(distribution.length + 1).fill(0);
-    for (const [events, weight] of distribution.entries()) {
-      next[events] = (next[events] ?? 0) + weight * (1 - probability);
-      next[events + 1] = (next[events + 1] ?? 0) + weight * probability;
+    high += 1;
+    for (let events = high; events > low; events -= 1) {
+      distribution[events] =
+        (distribution[events] ?? 0) * (1 - probability) + (distribution[events - 1] ?? 0) * probability;
     }
-    distribution = next;
+    distribution[low] = (distribution[low] ?? 0) * (1 - probability);
+    while (low < high && (distribution[low] ?? 0) < negligible) {
+      distribution[low] = 0;
+      low += 1;
+    }
+    while (high > low && (distribution[high] ?? 0) < negligible) {
+      distribution[high] = 0;
+      high -= 1;
+    }
   }
-  return distribution;
+  return Array.from(distribution);
 }
 
 /**
