@@ -1,7 +1,7 @@
 import { LandingBell, type LandingMark } from '@/components/charts/landing-bell';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Card } from '@/components/ui/card';
-import { formatDate } from '@/components/ui/number-format';
+import { formatDate, withDatesInWords } from '@/components/ui/number-format';
 import { Txt } from '@/components/ui/text';
 
 /** Where the underlying landed in the sealed forecast, or where it is now. */
@@ -45,13 +45,25 @@ export function LandingSection({ entry }: { entry: SealedEntry }) {
   );
 }
 
+const pricedAt = {
+  close: 'at the close of',
+  open: 'at the open of',
+  settlement: 'at the settlement value of',
+  'close-after-exit': 'at the close after the planned exit of',
+} as const;
+
 function subtitle({ row, sealed, outcome }: SealedEntry): string {
   const { symbol } = row.underlying;
   if (outcome?.move != null) {
     const sessions = Number(outcome.move.sessions.toFixed(2));
-    return `${symbol} at the close of ${formatDate(outcome.move.sessionDate, 'long')}, after ${sessions} ${sessions === 1 ? 'session' : 'sessions'}, against the sealed forecast`;
+    return `${symbol} ${pricedAt[outcome.move.pricedBy]} ${formatDate(outcome.move.sessionDate, 'long')}, after ${sessions} ${sessions === 1 ? 'session' : 'sessions'}, against the sealed forecast`;
   }
+  // A close is waited for on the day of the exit itself; a settlement value may come days later.
+  const waiting =
+    outcome?.moveWaitsFor != null && sealed.input.underlying.settlementTime === 'am'
+      ? `, waiting for ${withDatesInWords(outcome.moveWaitsFor)}`
+      : '';
   if (outcome?.moveSoFar != null)
-    return `${symbol} at the close of ${formatDate(outcome.moveSoFar.sessionDate, 'long')}; planned exit ${formatDate(sealed.forecast.exitSessionDate, 'long')}`;
+    return `${symbol} at the close of ${formatDate(outcome.moveSoFar.sessionDate, 'long')}; planned exit ${formatDate(sealed.forecast.exitSessionDate, 'long')}${waiting}`;
   return `${symbol} to the planned exit, ${formatDate(sealed.forecast.exitSessionDate, 'long')}`;
 }

@@ -26,6 +26,7 @@ export function OddsOutcomeSection({ entry }: { entry: SealedEntry }) {
         {sealed.forecast.odds.map((odds, index) => {
           const result = resolved.get(odds.key);
           const happened = result?.happened ?? null;
+          const isPending = happened === null && (result?.cannotTell ?? null) === null;
           return (
             <View key={odds.key} style={{ gap: 8 }}>
               {index > 0 ? <Rule /> : null}
@@ -36,7 +37,7 @@ export function OddsOutcomeSection({ entry }: { entry: SealedEntry }) {
                 high={odds.probability.high}
                 marketImplied={odds.marketImplied ?? undefined}
                 outcome={happened === null ? undefined : happened ? 1 : 0}
-                due={happened === null ? formatDate(odds.dueSessionDate, 'short') : undefined}
+                due={isPending ? formatDate(odds.dueSessionDate, 'short') : undefined}
                 footNote={footNote(result)}
               />
             </View>
@@ -50,9 +51,10 @@ export function OddsOutcomeSection({ entry }: { entry: SealedEntry }) {
 
 type Resolved = NonNullable<Entry['outcome']>['odds'][number];
 
-/** The score once there is one, else what is waited for. */
+/** The score once there is one, else what is waited for or why there will be none. */
 function footNote(result: Resolved | undefined): string | undefined {
   if (result === undefined) return undefined;
+  if (result.cannotTell !== null) return result.cannotTell;
   if (result.brierScore === null)
     return result.waitsFor === null ? undefined : withDatesInWords(`waits for ${result.waitsFor}`);
   const score = (value: number) => value.toFixed(value < 0.1 ? 3 : 2);

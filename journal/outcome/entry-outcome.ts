@@ -2,9 +2,10 @@ import { type Fill } from '@/journal/fills/fill';
 import { type Forecast, type StatedOdds } from '@/journal/forecast/forecast';
 import { type ForecastInput } from '@/journal/forecast/forecast-input';
 
-/** One session's prices as far as the outcome needs them; high and low only where the bar has them. */
+/** One session's prices as far as the outcome needs them; open, high and low only where the bar has them. */
 export interface OutcomeBar {
   readonly sessionDate: string;
+  readonly open: number | null;
   readonly close: number;
   readonly high: number | null;
   readonly low: number | null;
@@ -28,14 +29,27 @@ export interface ResolvedOdds {
   readonly brierScore: number | null;
   readonly marketBrierScore: number | null;
   readonly logScore: number | null;
-  /** Why there is no answer: what is waited for. */
+  /** Why there is no answer yet: what is waited for. */
   readonly waitsFor: string | null;
+  /** Why there will be no answer; null while there is one or one may still come. */
+  readonly cannotTell: typeof CANNOT_TELL | null;
   /** Of a touched level: judged by highs and lows, or by closes where a bar has no range. */
   readonly monitoredBy: 'range' | 'closes' | null;
 }
 
+/** Said of a question that the prices of whole sessions do not settle. */
+export const CANNOT_TELL = 'cannot tell from daily bars';
+
+/**
+ * Which price ended a move. 'close-after-exit' is the close of a session that held both the start and the planned exit: daily bars
+ * know no earlier price, so the move is taken to that close, over the sessions to that close.
+ */
+export type PricedBy = 'close' | 'open' | 'settlement' | 'close-after-exit';
+
 export interface MoveOutcome {
   readonly sessionDate: string;
+  readonly pricedBy: PricedBy;
+  /** From the moment of the spot price to that of the end price, on the session clock. */
   readonly sessions: number;
   readonly startPrice: number;
   readonly endPrice: number;
@@ -46,8 +60,13 @@ export interface MoveOutcome {
 }
 
 export interface EntryOutcome {
-  /** The move to the planned exit (or, traded out earlier, to the session of the last closing fill); null until its bar is there. */
+  /**
+   * The move to the planned exit (or, traded out in an earlier session, to the close of that one); null until its price is there.
+   * An exit between open and close is judged by the last price that daily bars have by then.
+   */
   readonly move: MoveOutcome | null;
+  /** What the move waits for; null once it is there. */
+  readonly moveWaitsFor: string | null;
   /** The latest known move while it is still running. */
   readonly moveSoFar: MoveOutcome | null;
   readonly realisedVolatility: {
@@ -69,6 +88,6 @@ export interface EntryOutcome {
     readonly horizon: 'expiry' | 'exit';
     readonly expectedMean: number;
   } | null;
-  /** True once the options' expiry is settled and nothing is waited for. */
+  /** True once the options' expiry is settled and no answer is waited for. */
   readonly isComplete: boolean;
 }

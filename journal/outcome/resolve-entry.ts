@@ -1,25 +1,31 @@
 import { isFlat } from '@/journal/fills/position';
 import { matchLots } from '@/journal/fills/lots';
 import { type Fill } from '@/journal/fills/fill';
+import { type StatedOdds } from '@/journal/forecast/forecast';
+import { type ForecastInput } from '@/journal/forecast/forecast-input';
 import { lawAt, planModel, planLogDrift, type PlanModel } from '@/journal/forecast/plan-model';
 import { planHorizon } from '@/journal/forecast/plan-horizon';
 import { toModelNumber } from '@/journal/money/decimal';
+import { type Answer, type AnswerContext } from '@/journal/outcome/answer';
 import {
+  CANNOT_TELL,
   type EntryOutcome,
   type MoveOutcome,
-  type OutcomeBar,
   type OutcomeQuestion,
   type ResolvedOdds,
 } from '@/journal/outcome/entry-outcome';
+import { plannedEnd, reachedEnd } from '@/journal/outcome/hold-end';
+import { type ObservedPrice, pricePath } from '@/journal/outcome/price-path';
 import { profitPercentile } from '@/journal/outcome/profit-percentile';
 import { realisedMove } from '@/journal/outcome/realised-move';
 import { realisedVolatility, volatilityRatioRange } from '@/journal/outcome/realised-volatility';
-import { answerOdds, settlementValue } from '@/journal/outcome/resolve-odds';
+import { answerOdds } from '@/journal/outcome/resolve-odds';
 import { brierScore } from '@/journal/scoring/brier-score';
 import { clippedLogScore } from '@/journal/scoring/log-score';
 import { type ExchangeCalendar, nextSession, sessionsInRange } from '@/journal/sessions/exchange-calendar';
 import { instantMilliseconds } from '@/journal/sessions/instant';
 import { sessionEndingAfter, sessionsBetween } from '@/journal/sessions/session-clock';
+import { ewmaEffectiveReturns } from '@/journal/volatility/ewma-daily-volatility';
 
 /** A cent either way: a fill's profit and a forecast's point mass may differ by rounding. */
 const HALF_A_CENT = 0.005;
@@ -37,7 +43,7 @@ export function resolveEntry(question: OutcomeQuestion, calendar: ExchangeCalend
   const profit = profitOutcome(model, fills, isFinal);
   const afterExit = nextSession(calendar, forecast.exitSessionDate);
   const first = sessionEndingAfter(calendar, instantMilliseconds(input.spot.at));
-  const context = {
+  const context: AnswerContext = {
     model,
     barsSince,
     watchedSessionDates: sessionsInRange(calendar, { from: first.date, through: forecast.exitSessionDate }).map(
@@ -47,103 +53,88 @@ export function resolveEntry(question: OutcomeQuestion, calendar: ExchangeCalend
       profit !== null && isFinal && fills.every(({ tradedAt }) => tradedAt < afterExit.opensAt)
         ? toModelNumber(profit.realised)
         : null,
+    end: plannedEnd(model, calendar),
     startsInsideSession: first.opensAt < input.spot.at,
   };
-  const odds = forecast.odds.map((stated): ResolvedOdds => {
-    const answer = answerOdds(stated, context);
-    if (answer.kind === 'waiting') {
-      return {
-        odds: stated,
-        happened: null,
-        brierScore: null,
-        marketBrierScore: null,
-        logScore: null,
-        waitsFor: answer.waitsFor,
-        monitoredBy: null,
-      };
-    }
-    const { happened, monitoredBy } = answer;
-    return {
-      odds: stated,
-      happened,
-      brierScore: brierScore(stated.probability.base, happened),
-      marketBrierScore: stated.marketImplied === null ? null : brierScore(stated.marketImplied, happened),
-      logScore: clippedLogScore(stated.probability.base, happened).score,
-      waitsFor: null,
-      monitoredBy,
-    };
-  });
-  const endDate = moveEndDate(model, fills, isFinal, calendar);
-  const endBar = barsSince.find((bar) => bar.sessionDate === endDate);
-  const lastBar = barsSince.filter((bar) => bar.sessionDate <= endDate).at(-1);
-  const move = endBar === undefined ? null : moveTo(model, endBar, calendar);
+  const odds = forecast.odds.map((stated) => resolvedOdds(stated, answerOdds(stated, context)));
+  const path = pricePath({ model, barsSince, end: reachedEnd(model, { fills, isFinal }, calendar) }, calendar);
+  const latest = moveTo(model, path.observed.at(-1), calendar);
   return {
-    move,
-    moveSoFar: move === null && lastBar !== undefined ? moveTo(model, lastBar, calendar) : null,
-    realisedVolatility: volatilityOver(
-      model,
-      barsSince.filter((bar) => bar.sessionDate <= endDate),
-      calendar,
-    ),
+    move: path.waitsFor === null ? latest : null,
+    moveWaitsFor: path.waitsFor,
+    moveSoFar: path.waitsFor === null ? null : latest,
+    realisedVolatility: volatilityOver(model, path.observed, calendar),
     odds,
     profit,
-    isComplete: odds.every(({ happened }) => happened !== null) && (fills.length === 0 || isFinal),
+    isComplete: odds.every(({ waitsFor }) => waitsFor === null) && (fills.length === 0 || isFinal),
   };
 }
 
-/** The planned exit's session, or that of the last fill when the position was flat before. */
-function moveEndDate(model: PlanModel, fills: readonly Fill[], isFinal: boolean, calendar: ExchangeCalendar): string {
-  const planned = model.horizon.exitSessionDate;
-  if (!isFinal) return planned;
-  const last = fills.reduce((latest, fill) => (fill.tradedAt > latest ? fill.tradedAt : latest), model.input.spot.at);
-  // A fill booked at the very close belongs to the session that closes then.
-  const session = sessionEndingAfter(calendar, instantMilliseconds(last) - 1).date;
-  return session < planned ? session : planned;
+function resolvedOdds(odds: StatedOdds, answer: Answer): ResolvedOdds {
+  if (answer.kind !== 'known') {
+    return {
+      odds,
+      happened: null,
+      brierScore: null,
+      marketBrierScore: null,
+      logScore: null,
+      waitsFor: answer.kind === 'waiting' ? answer.waitsFor : null,
+      cannotTell: answer.kind === 'cannot-tell' ? CANNOT_TELL : null,
+      monitoredBy: null,
+    };
+  }
+  const { happened, monitoredBy } = answer;
+  return {
+    odds,
+    happened,
+    brierScore: brierScore(odds.probability.base, happened),
+    marketBrierScore: odds.marketImplied === null ? null : brierScore(odds.marketImplied, happened),
+    logScore: clippedLogScore(odds.probability.base, happened).score,
+    waitsFor: null,
+    cannotTell: null,
+    monitoredBy,
+  };
 }
 
-function moveTo(model: PlanModel, bar: OutcomeBar, calendar: ExchangeCalendar): MoveOutcome | null {
+function moveTo(model: PlanModel, seen: ObservedPrice | undefined, calendar: ExchangeCalendar): MoveOutcome | null {
+  if (seen === undefined) return null;
   const { input, spotPrice, horizon } = model;
-  const session = calendar.sessionOn(bar.sessionDate);
-  if (session === null) return null;
   const settings = { overnightShare: input.overnightShare };
-  const sessions = sessionsBetween({ calendar, from: input.spot.at, to: session.closesAt, settings });
-  const isExpiry = bar.sessionDate === horizon.expirySessionDate;
-  const endPrice = (isExpiry ? settlementValue({ model, barsSince: [bar] }) : null) ?? bar.close;
-  const variance = input.volatility.base ** 2;
+  const sessions = sessionsBetween({ calendar, from: input.spot.at, to: seen.at, settings });
   // The drift of the hold, in proportion to the sessions that really passed.
   const drift = (planLogDrift(model, input.drift, input.volatility.base, 'exit') / horizon.sessions.holding) * sessions;
-  if (!(sessions > 0 && variance > 0)) return null;
-  const { logReturn, inSigmas, percentile } = realisedMove({
+  if (!(sessions > 0)) return null;
+  const { sessionDate, price: endPrice, pricedBy } = seen;
+  const move = realisedMove({
     startPrice: spotPrice,
     endPrice,
     dailyVolatility: input.volatility.base,
     sessions,
     logDrift: drift,
   });
-  return { sessionDate: bar.sessionDate, sessions, startPrice: spotPrice, endPrice, logReturn, inSigmas, percentile };
+  const { logReturn, inSigmas, percentile } = move;
+  return { sessionDate, pricedBy, sessions, startPrice: spotPrice, endPrice, logReturn, inSigmas, percentile };
 }
 
 function volatilityOver(
   model: PlanModel,
-  bars: readonly OutcomeBar[],
+  observed: readonly ObservedPrice[],
   calendar: ExchangeCalendar,
 ): EntryOutcome['realisedVolatility'] {
   const { input, spotPrice } = model;
   const settings = { overnightShare: input.overnightShare };
   let from = input.spot.at;
-  let price = spotPrice;
+  let lastPrice = spotPrice;
   const returns: { logReturn: number; sessions: number }[] = [];
-  for (const bar of bars) {
-    const session = calendar.sessionOn(bar.sessionDate);
-    if (session === null) continue;
-    const sessions = sessionsBetween({ calendar, from, to: session.closesAt, settings });
-    if (sessions > 0) returns.push({ logReturn: Math.log(bar.close / price), sessions });
-    from = session.closesAt;
-    price = bar.close;
+  for (const { at, price } of observed) {
+    const sessions = sessionsBetween({ calendar, from, to: at, settings });
+    if (sessions > 0) returns.push({ logReturn: Math.log(price / lastPrice), sessions });
+    from = at;
+    lastPrice = price;
   }
   if (returns.length === 0) return null;
   const { dailyVolatility, sessions } = realisedVolatility(returns);
-  const degreesOfFreedom = input.volatility.window === null ? null : input.volatility.window - 1;
+  const degreesOfFreedom = volatilityDegrees(input.volatility);
   const range =
     degreesOfFreedom === null ? null : volatilityRatioRange({ returnsRealised: returns.length, degreesOfFreedom });
   return {
@@ -153,6 +144,12 @@ function volatilityOver(
     ratioLow: range?.low ?? null,
     ratioHigh: range?.high ?? null,
   };
+}
+
+/** Returns that the plan's volatility rests on, less one where their mean was taken off; null when it was typed. */
+function volatilityDegrees({ window, lambda }: ForecastInput['volatility']): number | null {
+  if (window !== null) return window - 1;
+  return lambda === null ? null : ewmaEffectiveReturns(lambda);
 }
 
 function profitOutcome(model: PlanModel, fills: readonly Fill[], isFinal: boolean): EntryOutcome['profit'] {

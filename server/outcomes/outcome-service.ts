@@ -88,10 +88,11 @@ export class OutcomeService {
   }
 }
 
-function outcomeBar({ sessionDate, close, high, low, settlement }: Bar): OutcomeBar {
+function outcomeBar({ sessionDate, open, close, high, low, settlement }: Bar): OutcomeBar {
   const numberOrNull = (text: string | null) => (text === null ? null : toModelNumber(text));
   return {
     sessionDate,
+    open: numberOrNull(open),
     close: toModelNumber(close),
     high: numberOrNull(high),
     low: numberOrNull(low),

@@ -1,10 +1,13 @@
 import { z } from 'zod';
+import { CANNOT_TELL } from '@/journal/outcome/entry-outcome';
 import { decimalTextSchema, sessionDateSchema } from '@/shared/contract/fields';
 import { statedOddsSchema } from '@/shared/entries/forecast-schema';
 
 const number = z.number();
+// Outcomes stored before a field was added are read with its default, until they are computed again.
 const moveSchema = z.strictObject({
   sessionDate: sessionDateSchema,
+  pricedBy: z.enum(['close', 'open', 'settlement', 'close-after-exit']).default('close'),
   sessions: number,
   startPrice: number,
   endPrice: number,
@@ -16,6 +19,7 @@ const moveSchema = z.strictObject({
 /** Expected against realised for one entry (journal/outcome/entry-outcome). */
 export const entryOutcomeSchema = z.strictObject({
   move: moveSchema.nullable(),
+  moveWaitsFor: z.string().nullable().default(null),
   moveSoFar: moveSchema.nullable(),
   realisedVolatility: z
     .strictObject({
@@ -34,6 +38,7 @@ export const entryOutcomeSchema = z.strictObject({
       marketBrierScore: number.nullable(),
       logScore: number.nullable(),
       waitsFor: z.string().nullable(),
+      cannotTell: z.literal(CANNOT_TELL).nullable().default(null),
       monitoredBy: z.enum(['range', 'closes']).nullable(),
     }),
   ),

@@ -3,17 +3,11 @@ import { makeForecast } from '@/journal/forecast/make-forecast';
 import { type ForecastInput } from '@/journal/forecast/forecast-input';
 import { type OutcomeBar } from '@/journal/outcome/entry-outcome';
 import { resolveEntry } from '@/journal/outcome/resolve-entry';
+import { volatilityRatioRange } from '@/journal/outcome/realised-volatility';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
 import { closeOf, longCall } from '@/tests/journal/forecast/plan-examples';
+import { outcomeBar as bar } from '@/tests/journal/outcome/outcome-bars';
 
-const bar = (sessionDate: string, close: number, rest: Partial<OutcomeBar> = {}): OutcomeBar => ({
-  sessionDate,
-  close,
-  high: null,
-  low: null,
-  settlement: null,
-  ...rest,
-});
 const resolve = (input: ForecastInput, barsSince: OutcomeBar[], fills: Fill[] = []) =>
   resolveEntry({ input, forecast: makeForecast(input, usOptionsCalendar), barsSince, fills }, usOptionsCalendar);
 
@@ -213,6 +207,26 @@ describe('a trade still open at its planned exit', () => {
 
   it('is answered by its own profit when it was sold on the day of the exit', () => {
     expect(answerOf(soldAt('2026-12-14T20:58:00.000Z'))).toBe(true);
+  });
+});
+
+describe('the range that chance alone allows the realised volatility', () => {
+  const closes = [bar('2026-12-10', 100.8), bar('2026-12-11', 101.6), bar('2026-12-14', 102.5)];
+  const rangeOf = (volatility: Partial<ForecastInput['volatility']>) => {
+    const input = { ...longCall, volatility: { ...longCall.volatility, ...volatility } };
+    const { ratioLow, ratioHigh } = resolve(input, closes).realisedVolatility ?? {};
+    return [ratioLow, ratioHigh];
+  };
+
+  it('rests on the returns of a window less one, and on the effective returns of a weighted estimate', () => {
+    const from = (degreesOfFreedom: number) =>
+      Object.values(volatilityRatioRange({ returnsRealised: 3, degreesOfFreedom }));
+    expect(rangeOf({})).toEqual(from(19));
+    expect(rangeOf({ source: 'ewma', window: null, lambda: 0.94 })).toEqual(from((1 + 0.94) / (1 - 0.94)));
+  });
+
+  it('is not there for a typed volatility, of whose source nothing is known', () => {
+    expect(rangeOf({ source: 'typed', window: null })).toEqual([null, null]);
   });
 });
 
