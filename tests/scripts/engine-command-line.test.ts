@@ -1,5 +1,8 @@
-import { spawnSync } from 'node:child_process';
+import { spawn, spawnSync } from 'node:child_process';
 import path from 'node:path';
+import { createInterface } from 'node:readline';
+import { Readable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
 
 const root = path.resolve(__dirname, '../..');
 
@@ -44,4 +47,23 @@ describe('engine command line', () => {
     expect(answers).toEqual([]);
     expect(stderr).toContain('price|implied|volatility');
   });
+
+  it('answers 200,000 cases in a heap that could not hold them', async () => {
+    const count = 200_000;
+    const child = spawn(process.execPath, ['--import', 'tsx', 'server/cli/engine.ts', 'price'], {
+      cwd: root,
+      env: { ...process.env, TSX_TSCONFIG_PATH: 'server/tsconfig.json', NODE_OPTIONS: '--max-old-space-size=64' },
+      stdio: ['pipe', 'pipe', 'inherit'],
+    });
+    const ended = new Promise<number | null>((resolve) => child.once('exit', resolve));
+    const cases = function* () {
+      for (let index = 0; index < count; index += 1) yield `${optionLine(90 + index / count)}\n`;
+    };
+    const fed = pipeline(Readable.from(cases()), child.stdin);
+    let answered = 0;
+    for await (const answer of createInterface({ input: child.stdout }))
+      if (answer.startsWith('{"price":')) answered += 1;
+    await fed;
+    expect([await ended, answered]).toEqual([0, count]);
+  }, 120_000);
 });
