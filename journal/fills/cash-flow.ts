@@ -1,4 +1,5 @@
 import { type Fill } from '@/journal/fills/fill';
+import { type InstrumentChange } from '@/journal/fills/instrument-change';
 import { type SignedFill, signFills } from '@/journal/fills/signed-fill';
 import { Decimal, type DecimalText, toDecimalText } from '@/journal/money/decimal';
 
@@ -12,18 +13,18 @@ export function cashFlowOf({ signedQuantity, price, multiplier, fees }: SignedFi
 
 /**
  * Cash that moved with each fill, after fees.
- * @param fills effective fills, any order.
+ * @param fills effective fills, any order. @param changes splits and other adjustments of what is held, any order.
  * @returns one amount a fill by its id, in order of effect; received is positive.
  * @throws {DomainError} as signFills.
  */
-export function cashFlows(fills: readonly Fill[]): Map<string, DecimalText> {
-  return new Map(signFills(fills).map((signed) => [signed.fill.id, toDecimalText(cashFlowOf(signed))]));
+export function cashFlows(fills: readonly Fill[], changes: readonly InstrumentChange[] = []): Map<string, DecimalText> {
+  return new Map(signFills(fills, changes).map((signed) => [signed.fill.id, toDecimalText(cashFlowOf(signed))]));
 }
 
 /**
  * Sum of all cash flows after fees. Once every position is flat this is the realised profit, whatever the matching method.
  * @throws {DomainError} as signFills.
  */
-export function totalCashFlow(fills: readonly Fill[]): DecimalText {
-  return toDecimalText(signFills(fills).reduce((sum, signed) => sum.plus(cashFlowOf(signed)), new Decimal(0)));
+export function totalCashFlow(fills: readonly Fill[], changes: readonly InstrumentChange[] = []): DecimalText {
+  return toDecimalText(signFills(fills, changes).reduce((sum, signed) => sum.plus(cashFlowOf(signed)), new Decimal(0)));
 }

@@ -7,10 +7,24 @@ import { type DecimalText } from '@/journal/money/decimal';
  */
 export type FillKind = 'buy' | 'sell' | 'expiry' | 'assignment' | 'exercise';
 
+/** What one contract of an adjusted series delivers: no longer as many shares of its own underlying as its price is multiplied by. */
+export interface Deliverable {
+  readonly symbol: string;
+  /** Above 0. */
+  readonly sharesPerContract: DecimalText;
+  /** Currency delivered beside the shares, 0 or more. */
+  readonly cashPerContract: DecimalText;
+}
+
 export interface OptionInstrument extends OptionContract {
   readonly kind: 'option';
-  /** Shares, or currency per point, that one contract's price is multiplied by; decimal text above 0. */
+  /**
+   * Shares, or currency per point, that one contract's price is multiplied by; decimal text above 0. The strike is multiplied by it
+   * too, whatever is delivered.
+   */
   readonly multiplier: DecimalText;
+  /** Only of an adjusted series; else as many shares of the underlying as the multiplier says. */
+  readonly deliverable?: Deliverable;
 }
 export interface StockInstrument {
   readonly kind: 'stock';

@@ -1,13 +1,12 @@
 import { closedLot } from '@/journal/fills/closed-lot';
+import { type Instrument } from '@/journal/fills/fill';
 import { type ClosedLot, type LotDirection, type OpenLot } from '@/journal/fills/lot';
-import { type LotBook } from '@/journal/fills/lot-book';
+import { type CarriedLot, type LotBook } from '@/journal/fills/lot-book';
+import { AVERAGE_PLACES, averagePrice } from '@/journal/fills/lot-value';
 import { type SignedFill } from '@/journal/fills/signed-fill';
 import { dealPart, startAmountSplit, undealtAmount } from '@/journal/money/amount-split';
 import { Decimal, toDecimalText } from '@/journal/money/decimal';
 import { roundMoney } from '@/journal/money/rounding';
-
-/** Averages need not end (a third of a cent); they are kept to this many decimals, and the last part closed takes the rest. */
-const averagePlaces = 12;
 
 interface Pool {
   readonly direction: LotDirection;
@@ -28,14 +27,14 @@ export class LotPool implements LotBook {
     const direction = signed.signedQuantity.isPositive() ? 'long' : 'short';
     const quantity = signed.signedQuantity.abs();
     if (this.pool === null || this.pool.direction === direction) {
-      this.add({ signed, direction, quantity, fees: signed.fees });
+      this.open(signed, { direction, quantity, fees: signed.fees });
       return [];
     }
     const closedQuantity = Decimal.min(quantity, this.pool.quantity);
     const closeFees = dealPart(startAmountSplit({ amount: signed.fees, quantity }), closedQuantity);
     const closed = this.close({ pool: this.pool, signed, quantity: closedQuantity, closeFees: closeFees.part });
     const left = quantity.minus(closedQuantity);
-    if (left.greaterThan(0)) this.add({ signed, direction, quantity: left, fees: undealtAmount(closeFees.split) });
+    if (left.greaterThan(0)) this.open(signed, { direction, quantity: left, fees: undealtAmount(closeFees.split) });
     return [closed];
   }
 
@@ -50,32 +49,42 @@ export class LotPool implements LotBook {
         fillId: null,
         openedAt,
         price: toDecimalText(averagePrice(this.pool)),
+        value: toDecimalText(this.pool.value),
         fees: toDecimalText(fees),
       },
     ];
   }
 
-  private add({
-    signed,
-    direction,
-    quantity,
-    fees,
-  }: {
-    signed: SignedFill;
-    direction: LotDirection;
-    quantity: Decimal;
-    fees: Decimal;
-  }) {
-    const value = signed.price.times(quantity).times(signed.multiplier);
-    this.pool = {
-      direction,
-      openedAt: this.pool?.openedAt ?? signed.fill.tradedAt,
-      instrument: signed.fill.instrument,
-      multiplier: signed.multiplier,
-      quantity: quantity.plus(this.pool?.quantity ?? 0),
-      value: value.plus(this.pool?.value ?? 0),
-      fees: fees.plus(this.pool?.fees ?? 0),
-    };
+  carryOut(): CarriedLot[] {
+    if (this.pool === null) return [];
+    const { direction, openedAt, quantity, value, fees } = this.pool;
+    this.pool = null;
+    return [{ direction, openFillId: null, openedAt, quantity, value, fees }];
+  }
+
+  carryIn(lots: readonly CarriedLot[], into: { readonly instrument: Instrument; readonly multiplier: Decimal }): void {
+    for (const { direction, openedAt, quantity, value, fees } of lots) {
+      this.add({ ...into, direction, openedAt, quantity, value, fees });
+    }
+  }
+
+  private open({ fill, multiplier, price }: SignedFill, part: Pick<Pool, 'direction' | 'quantity' | 'fees'>): void {
+    const value = price.times(part.quantity).times(multiplier);
+    this.add({ ...part, instrument: fill.instrument, multiplier, openedAt: fill.tradedAt, value });
+  }
+
+  private add(more: Pool): void {
+    const { pool } = this;
+    this.pool =
+      pool === null
+        ? more
+        : {
+            ...more,
+            openedAt: Date.parse(more.openedAt) < Date.parse(pool.openedAt) ? more.openedAt : pool.openedAt,
+            quantity: pool.quantity.plus(more.quantity),
+            value: pool.value.plus(more.value),
+            fees: pool.fees.plus(more.fees),
+          };
   }
 
   private close({
@@ -92,7 +101,7 @@ export class LotPool implements LotBook {
     const isAll = quantity.equals(pool.quantity);
     const openValue = isAll
       ? pool.value
-      : roundMoney(pool.value.times(quantity).dividedBy(pool.quantity), averagePlaces);
+      : roundMoney(pool.value.times(quantity).dividedBy(pool.quantity), AVERAGE_PLACES);
     const openFees = dealPart(startAmountSplit({ amount: pool.fees, quantity: pool.quantity }), quantity);
     this.pool = isAll
       ? null
@@ -114,8 +123,4 @@ export class LotPool implements LotBook {
       closeFees,
     });
   }
-}
-
-function averagePrice({ value, quantity, multiplier }: Pool): Decimal {
-  return roundMoney(value.dividedBy(quantity).dividedBy(multiplier), averagePlaces);
 }

@@ -17,7 +17,7 @@ export interface ClosedLot {
   /** At average cost the instant the pool began. */
   readonly openedAt: string;
   readonly closedAt: string;
-  /** Per share; at average cost rounded to 12 decimals. */
+  /** Per share; at average cost, and after a split or other change, rounded to 12 decimals. */
   readonly openPrice: DecimalText;
   readonly closePrice: DecimalText;
   readonly grossProfit: DecimalText;
@@ -36,8 +36,10 @@ export interface OpenLot {
   /** Null at average cost. */
   readonly fillId: string | null;
   readonly openedAt: string;
-  /** Per share; at average cost rounded to 12 decimals. */
+  /** Per share; at average cost, and after a split or other change, rounded to 12 decimals. */
   readonly price: DecimalText;
+  /** Price x quantity x multiplier without rounding, currency, 0 or more: what was paid, or received when short. */
+  readonly value: DecimalText;
   /** Fees of opening that no closed lot has borne yet. */
   readonly fees: DecimalText;
 }

@@ -1,10 +1,12 @@
+import { changeLots } from '@/journal/fills/change-lots';
 import { cashFlowOf } from '@/journal/fills/cash-flow';
 import { type Fill } from '@/journal/fills/fill';
 import { type ClosedLot, type LotMethod, type OpenLot } from '@/journal/fills/lot';
 import { type LotBook } from '@/journal/fills/lot-book';
 import { LotPool } from '@/journal/fills/lot-pool';
 import { LotQueue } from '@/journal/fills/lot-queue';
-import { signFills } from '@/journal/fills/signed-fill';
+import { type InstrumentChange } from '@/journal/fills/instrument-change';
+import { signEvents } from '@/journal/fills/signed-fill';
 import { Decimal, type DecimalText, toDecimal, toDecimalText } from '@/journal/money/decimal';
 
 export interface MatchedLots {
@@ -25,17 +27,30 @@ export interface MatchedLots {
  * other way. Fees of a fill that is matched in parts are split to the cent without loss (journal/money/amount-split).
  * @param fills effective fills, any order, any number of instruments in one currency.
  * @param options.method 'fifo' oldest lot first, 'lifo' newest first, 'average' all at the average price of what is open.
- * @throws {DomainError} as signFills.
+ * @param options.changes splits, symbol changes and other adjustments of what is held, any order.
+ * @throws {DomainError} as signEvents.
  */
-export function matchLots(fills: readonly Fill[], { method }: { method: LotMethod }): MatchedLots {
+export function matchLots(
+  fills: readonly Fill[],
+  { method, changes = [] }: { method: LotMethod; changes?: readonly InstrumentChange[] },
+): MatchedLots {
   const books = new Map<string, LotBook>();
   const closed: ClosedLot[] = [];
   let fees = new Decimal(0);
   let cashFlow = new Decimal(0);
-  for (const signed of signFills(fills)) {
-    const book = books.get(signed.key) ?? (method === 'average' ? new LotPool() : new LotQueue(method));
-    books.set(signed.key, book);
-    closed.push(...book.apply(signed));
+  const bookOf = (key: string): LotBook => {
+    const book = books.get(key) ?? (method === 'average' ? new LotPool() : new LotQueue(method));
+    books.set(key, book);
+    return book;
+  };
+  for (const signed of signEvents(fills, changes)) {
+    if (signed.kind === 'change') {
+      const { to } = signed.change;
+      const carried = changeLots(bookOf(signed.fromKey).carryOut(), signed);
+      bookOf(signed.toKey).carryIn(carried, { instrument: to, multiplier: toDecimal(to.multiplier) });
+      continue;
+    }
+    for (const lot of bookOf(signed.key).apply(signed)) closed.push(lot);
     fees = fees.plus(signed.fees);
     cashFlow = cashFlow.plus(cashFlowOf(signed));
   }

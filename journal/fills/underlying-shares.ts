@@ -1,38 +1,50 @@
 import { DomainError } from '@/journal/errors/domain-error';
+import { exactPrice } from '@/journal/fills/exact-price';
 import { type Fill } from '@/journal/fills/fill';
 import { type DecimalText, toDecimal, toDecimalText } from '@/journal/money/decimal';
 
 export interface SharesFromExercise {
   /** The id of the stock fill to be made. */
   readonly id: string;
-  /** Shares one contract delivers, decimal text above 0; by default the option's multiplier. */
-  readonly sharesPerContract?: DecimalText;
   /** Fees of the delivery itself, currency; '0' when they stand on the option's fill. */
   readonly fees?: DecimalText;
 }
 
 /**
- * The trade in the underlying that an exercise or assignment of a physically settled option makes: at the strike, at the same
- * instant. An exercised call and an assigned put buy, an exercised put and an assigned call sell.
+ * The trade in the underlying that an exercise or assignment of a physically settled option makes, at the same instant. An
+ * exercised call and an assigned put buy, an exercised put and an assigned call sell. The strike times the premium's multiplier is
+ * paid for what is delivered, so the shares come at the strike; of an adjusted series, at what is left for them once the cash of
+ * the delivery is taken off. Where that price does not end, the rest of its rounding (below 1e-9) stands in the fees, so that no
+ * money is lost.
  * @param fill an option's 'exercise' or 'assignment'.
- * @throws {DomainError} `no-delivery` for any other fill, `quantity-not-positive`, `decimal-invalid`.
- * @see The Characteristics and Risks of Standardized Options (exercise and settlement); from memory.
+ * @throws {DomainError} `no-delivery` for any other fill, `quantity-not-positive`, `decimal-invalid`, `delivery-cash-invalid` when
+ *   the cash is negative or more than the strike pays for.
+ * @see The Characteristics and Risks of Standardized Options (exercise and settlement; adjustments); from memory.
  */
-export function sharesFromExercise(fill: Fill, { id, sharesPerContract, fees = '0' }: SharesFromExercise): Fill {
+export function sharesFromExercise(fill: Fill, { id, fees = '0' }: SharesFromExercise): Fill {
   const { instrument, kind } = fill;
   if (instrument.kind !== 'option' || (kind !== 'exercise' && kind !== 'assignment')) {
     throw new DomainError('no-delivery', { fillId: fill.id, kind, instrument: instrument.kind });
   }
-  const shares = toDecimal(fill.quantity).times(toDecimal(sharesPerContract ?? instrument.multiplier));
+  const { deliverable } = instrument;
+  const contracts = toDecimal(fill.quantity);
+  const shares = contracts.times(toDecimal(deliverable?.sharesPerContract ?? instrument.multiplier));
   if (!shares.greaterThan(0))
     throw new DomainError('quantity-not-positive', { fillId: fill.id, quantity: shares.toString() });
+  const cash = contracts.times(toDecimal(deliverable?.cashPerContract ?? '0'));
+  const strikeAmount = contracts.times(toDecimal(instrument.strikePrice)).times(toDecimal(instrument.multiplier));
+  if (cash.isNegative() || cash.greaterThan(strikeAmount)) {
+    throw new DomainError('delivery-cash-invalid', { fillId: fill.id, cash: cash.toString() });
+  }
+  const { price, rest } = exactPrice({ amount: strikeAmount.minus(cash), quantity: shares });
+  const isBuy = (instrument.type === 'call') === (kind === 'exercise');
   return {
     id,
-    kind: (instrument.type === 'call') === (kind === 'exercise') ? 'buy' : 'sell',
-    instrument: { kind: 'stock', symbol: instrument.underlyingSymbol, multiplier: '1' },
+    kind: isBuy ? 'buy' : 'sell',
+    instrument: { kind: 'stock', symbol: deliverable?.symbol ?? instrument.underlyingSymbol, multiplier: '1' },
     quantity: toDecimalText(shares),
-    price: instrument.strikePrice,
-    fees,
+    price: deliverable === undefined ? instrument.strikePrice : toDecimalText(price),
+    fees: toDecimalText(isBuy ? toDecimal(fees).plus(rest) : toDecimal(fees).minus(rest)),
     tradedAt: fill.tradedAt,
     sequence: fill.sequence,
   };

@@ -3,7 +3,7 @@ import { Decimal } from '@/journal/money/decimal';
 import { roundMoney } from '@/journal/money/rounding';
 
 /**
- * An amount dealt out over the parts of a quantity, part by part, to the cent and without loss: a part gets the rounded share of
+ * An amount dealt out over the parts of a quantity, part by part, to the cent (or to other places) and without loss: a part gets the rounded share of
  * all quantity dealt so far, less what was given before. The part that completes the quantity gets all that is left, also
  * fractions of a cent that the amount itself had. Immutable: each step gives the next state. (Common practice for split fees.)
  */
@@ -12,16 +12,27 @@ export interface AmountSplit {
   readonly quantity: Decimal;
   readonly dealtQuantity: Decimal;
   readonly givenAmount: Decimal;
+  /** Decimal places of every part but the last. */
+  readonly places: number;
 }
 
 /**
  * @param amount any sign (a rebate is negative), currency.
  * @param quantity above 0.
+ * @param places a whole number from 0; 2 by default.
  * @throws {DomainError} `quantity-not-positive`.
  */
-export function startAmountSplit({ amount, quantity }: { amount: Decimal; quantity: Decimal }): AmountSplit {
+export function startAmountSplit({
+  amount,
+  quantity,
+  places = 2,
+}: {
+  amount: Decimal;
+  quantity: Decimal;
+  places?: number;
+}): AmountSplit {
   if (!quantity.greaterThan(0)) throw new DomainError('quantity-not-positive', { quantity: quantity.toString() });
-  return { amount, quantity, dealtQuantity: new Decimal(0), givenAmount: new Decimal(0) };
+  return { amount, quantity, dealtQuantity: new Decimal(0), givenAmount: new Decimal(0), places };
 }
 
 /**
@@ -42,7 +53,7 @@ export function dealPart(split: AmountSplit, partQuantity: Decimal): { part: Dec
   }
   const givenAmount = dealtQuantity.equals(split.quantity)
     ? split.amount
-    : roundMoney(split.amount.times(dealtQuantity).dividedBy(split.quantity));
+    : roundMoney(split.amount.times(dealtQuantity).dividedBy(split.quantity), split.places);
   return { part: givenAmount.minus(split.givenAmount), split: { ...split, dealtQuantity, givenAmount } };
 }
 
