@@ -7,14 +7,17 @@ const percent = (fraction: number) => `${Math.round(fraction * 100)}%`;
 
 /**
  * What calibration says in one plain sentence: the level of odds whose frequency is farthest off, by what chance allows.
- * @param bins of the calibration curve. @param count all scored odds.
+ * @param bins of the calibration curve. @param count all scored odds. @param whose of the reader's own odds, or of those they mentor.
  */
-export function scoreSentence(bins: readonly CalibrationBin[], count: number): string {
+export function scoreSentence(
+  bins: readonly CalibrationBin[],
+  { count, whose }: { count: number; whose: 'own' | 'mentored' },
+): string {
   const spoken = bins.filter((bin) => bin.count >= FEWEST_IN_BIN);
   const farthest = [...spoken].sort((left, right) => distance(right) - distance(left))[0];
   if (farthest === undefined) return `${count} odds are scored; no level of odds has enough cases to speak of yet.`;
   const { forecast, observed, low, high } = farthest;
-  const head = `Your ${percent(forecast)} calls came in ${percent(observed)} of the time over ${farthest.count} cases`;
+  const head = `${whose === 'own' ? 'Your' : 'Their'} ${percent(forecast)} calls came in ${percent(observed)} of the time over ${farthest.count} cases`;
   const points = Math.round(Math.abs(forecast - observed) * 100);
   if (forecast >= low && forecast <= high)
     return `${head}: within what chance allows (${percent(low)} to ${percent(high)}).`;

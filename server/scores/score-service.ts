@@ -52,7 +52,10 @@ export class ScoreService {
                 high: consistentHigh,
               })),
               curve: scores.curve.points.map(({ probability, observed }) => ({ forecast: probability, observed })),
-              sentence: scoreSentence(scores.curve.bins, inTime.length),
+              sentence: scoreSentence(scores.curve.bins, {
+                count: inTime.length,
+                whose: scope.actor.role === 'mentor' ? 'mentored' : 'own',
+              }),
             },
     };
   }
