@@ -102,8 +102,8 @@ function useLadderRungs() {
         : detail.bars.filter((bar) => (usOptionsCalendar.sessionOn(bar.sessionDate)?.closesAt ?? '9') <= spotAt);
     if (known.length < 3) return [];
     return volatilityLadder(known.map((bar) => Number(bar.close))).map((rung) => ({
-      key: rung.method.kind === 'window' ? `window-${rung.method.window}` : 'ewma',
-      label: rung.method.kind === 'window' ? `${rung.method.window} sessions` : `Weighted, λ ${rung.method.lambda}`,
+      key: rung.method.kind === 'close' ? `window-${rung.method.window}` : 'ewma',
+      label: rung.method.kind === 'close' ? `${rung.method.window} sessions` : `Weighted, λ ${rung.method.lambda}`,
       dailyVolatility: rung.dailyVolatility,
       low: rung.low,
       high: rung.high,

@@ -2,10 +2,10 @@ import { Card } from '@/components/ui/card';
 import { formatPercent } from '@/components/ui/number-format';
 import { DataTable } from '@/components/ui/table';
 import { annualizedVolatility } from '@/journal/volatility/annualized-volatility';
-import { type VolatilityEstimate } from '@/journal/volatility/volatility-method';
+import { type CloseMethod, type VolatilityEstimate } from '@/journal/volatility/volatility-method';
 
 /** The ladder in figures: each method with its interval, the returns it rests on, and the annual conversion. */
-export function MoveTable({ ladder }: { ladder: readonly VolatilityEstimate[] }) {
+export function MoveTable({ ladder }: { ladder: readonly VolatilityEstimate<CloseMethod>[] }) {
   return (
     <Card title="In figures" subtitle="Sample mean removed; the weighted method takes it as 0">
       <DataTable
@@ -17,10 +17,10 @@ export function MoveTable({ ladder }: { ladder: readonly VolatilityEstimate[] })
           { key: 'annual', header: 'A year', align: 'right' },
         ]}
         rows={ladder.map((rung) => ({
-          key: rung.method.kind === 'window' ? String(rung.method.window) : 'ewma',
+          key: rung.method.kind === 'close' ? String(rung.method.window) : 'ewma',
           cells: {
             method:
-              rung.method.kind === 'window' ? `${rung.method.window} sessions` : `Weighted, λ ${rung.method.lambda}`,
+              rung.method.kind === 'close' ? `${rung.method.window} sessions` : `Weighted, λ ${rung.method.lambda}`,
             daily: formatPercent(rung.dailyVolatility, 2),
             interval: `${formatPercent(rung.low, 2)} to ${formatPercent(rung.high, 2)}`,
             annual: formatPercent(annualizedVolatility(rung.dailyVolatility), 1),

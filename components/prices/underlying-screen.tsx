@@ -21,7 +21,7 @@ import { useStartPlan } from '@/hooks/entries/use-start-plan';
 import { useUnderlying } from '@/hooks/underlyings/use-underlyings';
 import { annualizedVolatility } from '@/journal/volatility/annualized-volatility';
 import { placeInOwnYear } from '@/journal/volatility/place-in-own-year';
-import { type VolatilityEstimate } from '@/journal/volatility/volatility-method';
+import { type CloseMethod, type VolatilityEstimate } from '@/journal/volatility/volatility-method';
 import { volatilityLadder } from '@/journal/volatility/volatility-ladder';
 import { type UnderlyingDetail } from '@/shared/underlyings/underlying-endpoints';
 
@@ -152,11 +152,11 @@ function Headline({
 }: {
   detail: UnderlyingDetail;
   closes: readonly number[];
-  ladder: readonly VolatilityEstimate[];
+  ladder: readonly VolatilityEstimate<CloseMethod>[];
 }) {
   const isWide = useLayout().kind === 'wide';
   const last = detail.bars.at(-1);
-  const month = ladder.find(({ method }) => method.kind === 'window' && method.window === HEADLINE_WINDOW);
+  const month = ladder.find(({ method }) => method.kind === 'close' && method.window === HEADLINE_WINDOW);
   const place = useMemo(() => placeInOwnYear(closes, HEADLINE_WINDOW), [closes]);
   const figures: readonly (readonly [string, string, string])[] = [
     [
@@ -202,7 +202,7 @@ function Headline({
   );
 }
 
-function LadderCard({ ladder }: { ladder: readonly VolatilityEstimate[] }) {
+function LadderCard({ ladder }: { ladder: readonly VolatilityEstimate<CloseMethod>[] }) {
   return (
     <Card title="Volatility ladder" subtitle="One session, with 95% intervals">
       {ladder.length === 0 ? (
@@ -212,9 +212,9 @@ function LadderCard({ ladder }: { ladder: readonly VolatilityEstimate[] }) {
       ) : (
         <VolatilityLadder
           rungs={ladder.map((rung) => ({
-            key: rung.method.kind === 'window' ? String(rung.method.window) : 'ewma',
+            key: rung.method.kind === 'close' ? String(rung.method.window) : 'ewma',
             label:
-              rung.method.kind === 'window' ? `${rung.method.window} sessions` : `Weighted, λ ${rung.method.lambda}`,
+              rung.method.kind === 'close' ? `${rung.method.window} sessions` : `Weighted, λ ${rung.method.lambda}`,
             dailyVolatility: rung.dailyVolatility,
             low: rung.low,
             high: rung.high,

@@ -1,5 +1,8 @@
 import { DomainError } from '@/journal/errors/domain-error';
 import { exactSum } from '@/journal/returns/exact-sum';
+import { scaleUnit } from '@/journal/returns/scale-unit';
+
+const LARGEST_VALUE = 1e308;
 
 export interface SampleStatistics {
   readonly count: number;
@@ -20,7 +23,7 @@ export interface SampleStatistics {
 
 /**
  * Summary of a sample in two passes: first the mean, then moments about it.
- * @param values at least 2 finite numbers.
+ * @param values at least 2 numbers of a magnitude up to 1e308.
  * @returns moments and the Jarque-Bera statistic; NaN never: a sample without spread has skewness, kurtosis and
  *   autocorrelation 0 by convention.
  * @throws {DomainError} `too-few-values`, or `value-invalid` with the index.
@@ -28,12 +31,14 @@ export interface SampleStatistics {
  */
 export function sampleStatistics(values: readonly number[]): SampleStatistics {
   if (values.length < 2) throw new DomainError('too-few-values', { required: 2, received: values.length });
-  const invalid = values.findIndex((value) => !(Math.abs(value) < Infinity));
+  const invalid = values.findIndex((value) => !(Math.abs(value) <= LARGEST_VALUE));
   if (invalid >= 0) throw new DomainError('value-invalid', { index: invalid, value: values[invalid] ?? null });
 
   const count = values.length;
-  const mean = exactSum(values) / count;
-  const deviations = values.map((value) => value - mean);
+  const unit = scaleUnit(values);
+  const scaled = unit === 1 ? values : values.map((value) => value / unit);
+  const mean = exactSum(scaled) / count;
+  const deviations = scaled.map((value) => value - mean);
   // What rounding left in the mean shows as a mean of the deviations; taking it out is the corrected two-pass form.
   const residue = exactSum(deviations) / count;
   const centred = deviations.map((deviation) => deviation - residue);
@@ -47,9 +52,9 @@ export function sampleStatistics(values: readonly number[]): SampleStatistics {
   const jarqueBera = (count / 6) * (skewness ** 2 + excessKurtosis ** 2 / 4);
   return {
     count,
-    mean: mean + residue,
-    standardDeviation: Math.sqrt(squares / (count - 1)),
-    rootMeanSquare: Math.sqrt(exactSum(values.map((value) => value ** 2)) / count),
+    mean: (mean + residue) * unit,
+    standardDeviation: Math.sqrt(squares / (count - 1)) * unit,
+    rootMeanSquare: Math.sqrt(exactSum(scaled.map((value) => value ** 2)) / count) * unit,
     skewness,
     excessKurtosis,
     lagOneAutocorrelation: hasSpread ? exactSum(neighbours) / squares : 0,

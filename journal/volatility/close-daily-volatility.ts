@@ -3,7 +3,7 @@ import { sampleStatistics } from '@/journal/returns/sample-statistics';
 
 /**
  * Daily volatility of log returns, close to close.
- * @param returns log returns, at least 2 with the sample mean removed, at least 1 with zero mean.
+ * @param returns log returns of a magnitude up to 1e308, at least 2 with the sample mean removed, at least 1 with zero mean.
  * @param options.mean 'sample' divides by n − 1 about the sample mean; 'zero' divides the squares by n.
  * @returns standard deviation of one session's log return, a fraction, 0 or more.
  * @throws {DomainError} `too-few-returns`, or `value-invalid` with the index.
@@ -16,7 +16,8 @@ export function closeDailyVolatility(
 ): number {
   const required = mean === 'sample' ? 2 : 1;
   if (returns.length < required) throw new DomainError('too-few-returns', { required, received: returns.length });
-  if (returns.length === 1) return Math.abs(returns[0] ?? 0);
-  const { standardDeviation, rootMeanSquare } = sampleStatistics(returns);
+  // A second look at a single return does not change its root mean square.
+  const values = returns.length === 1 ? [...returns, ...returns] : returns;
+  const { standardDeviation, rootMeanSquare } = sampleStatistics(values);
   return mean === 'sample' ? standardDeviation : rootMeanSquare;
 }

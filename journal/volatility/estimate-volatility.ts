@@ -1,46 +1,35 @@
 import { DomainError } from '@/journal/errors/domain-error';
-import { logReturns } from '@/journal/returns/log-returns';
-import { sampleStatistics } from '@/journal/returns/sample-statistics';
-import { ewmaDailyVolatility, ewmaEffectiveReturns } from '@/journal/volatility/ewma-daily-volatility';
-import { volatilityInterval } from '@/journal/volatility/volatility-interval';
+import { type PriceBar } from '@/journal/returns/price-bar';
+import { defaultConfidence, estimateCloseVolatility } from '@/journal/volatility/estimate-close-volatility';
+import { estimateRangeVolatility, rangeSessions } from '@/journal/volatility/estimate-range-volatility';
 import { type VolatilityEstimate, type VolatilityMethod } from '@/journal/volatility/volatility-method';
 
-const DEFAULT_CONFIDENCE = 0.95;
+/** Prices oldest first, adjusted for splits: closes alone, or whole bars. */
+export type PriceHistory = { readonly closes: readonly number[] } | { readonly bars: readonly PriceBar[] };
 
 /**
- * Daily volatility of a series of closes by one method, with its interval.
- * @param closes oldest first, at least window + 1 for a window (window from 2), at least 2 for the weighted method.
- * @returns window: sample mean removed, n − 1 degrees of freedom; ewma: zero mean, started at the first squared return,
- *   its interval by the effective number of returns (common practice).
- * @throws {DomainError} `too-few-returns` with what is required, `close-invalid`, `confidence-out-of-range`, `lambda-out-of-range`.
+ * Daily volatility with its interval by any method; methods of closes take those of the bars.
+ * @throws {DomainError} `bars-missing` for a range method with closes only; otherwise as estimateCloseVolatility and
+ *   estimateRangeVolatility.
  * @see the methods' own files.
  */
 export function estimateVolatility(
-  closes: readonly number[],
+  prices: PriceHistory,
   method: VolatilityMethod,
-  confidence: number = DEFAULT_CONFIDENCE,
+  confidence: number = defaultConfidence,
 ): VolatilityEstimate {
-  const available = Math.max(0, closes.length - 1);
-  const required = method.kind === 'window' ? method.window : 1;
-  if (!(required >= 1) || available < required)
-    throw new DomainError('too-few-returns', { required, received: available });
-  if (method.kind === 'ewma') {
-    const dailyVolatility = ewmaDailyVolatility(logReturns(closes), { lambda: method.lambda });
-    const degreesOfFreedom = ewmaEffectiveReturns(method.lambda);
-    const interval = volatilityInterval({ dailyVolatility, degreesOfFreedom, confidence });
-    return { method, dailyVolatility, mean: 0, ...interval, confidence, degreesOfFreedom, returnsUsed: available };
-  }
-  const returns = logReturns(closes.slice(-(method.window + 1)));
-  const { standardDeviation, mean } = sampleStatistics(returns);
-  const degreesOfFreedom = returns.length - 1;
-  const interval = volatilityInterval({ dailyVolatility: standardDeviation, degreesOfFreedom, confidence });
-  return {
-    method,
-    dailyVolatility: standardDeviation,
-    mean,
-    ...interval,
-    confidence,
-    degreesOfFreedom,
-    returnsUsed: returns.length,
-  };
+  if (method.kind === 'close' || method.kind === 'ewma')
+    return estimateCloseVolatility(closesOf(prices), method, confidence);
+  if (!('bars' in prices)) throw new DomainError('bars-missing', { method: method.kind });
+  return estimateRangeVolatility(prices.bars, method, confidence);
+}
+
+/** The largest window a method can have over these prices: returns, or sessions for a range method; 1 where there are none. */
+export function largestWindow(prices: PriceHistory, kind: VolatilityMethod['kind']): number {
+  const count = 'bars' in prices ? prices.bars.length : prices.closes.length;
+  return Math.max(1, kind === 'close' || kind === 'ewma' ? count - 1 : rangeSessions(kind, count));
+}
+
+function closesOf(prices: PriceHistory): readonly number[] {
+  return 'bars' in prices ? prices.bars.map(({ close }) => close) : prices.closes;
 }

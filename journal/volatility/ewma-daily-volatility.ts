@@ -1,30 +1,60 @@
 import { DomainError } from '@/journal/errors/domain-error';
+import { scaleUnit } from '@/journal/returns/scale-unit';
+
+/** What the weighted variance starts from. */
+export type EwmaStart =
+  /** The mean of the first `count` squared returns; the recursion goes on from the next. */
+  | { readonly kind: 'firstSquares'; readonly count: number }
+  /** Nothing: only the last `count` returns are used, with weights λ^age that are made to sum to 1. */
+  | { readonly kind: 'lastReturns'; readonly count: number };
+
+/** The start where none is stated: the first squared return. */
+export const defaultEwmaStart: EwmaStart = { kind: 'firstSquares', count: 1 };
 
 /**
  * Daily volatility by exponentially weighted squared returns, v = λ·v + (1 − λ)·r².
- * @param returns log returns, oldest first, at least `seedReturns`.
+ * @param returns log returns, oldest first, as many as the start's count at least, each of a magnitude up to 1e308.
  * @param options.lambda decay, strictly between 0 and 1; 0.94 for daily data by the source.
- * @param options.seedReturns the recursion starts from the mean of this many first squared returns; 1 (the default) starts
- *   from the first squared return.
+ * @param options.start see {@link EwmaStart}, its count a whole number from 1.
  * @returns volatility for the next session, a fraction, 0 or more.
  * @throws {DomainError} `lambda-out-of-range`, `too-few-returns`, or `value-invalid` with the index.
- * @see J.P. Morgan/Reuters (1996), RiskMetrics Technical Document, 4th ed., chapter 5. Assumes zero mean.
+ * @see J.P. Morgan/Reuters (1996), RiskMetrics Technical Document, 4th ed., chapter 5 (74 last returns keep 99 % of the weight at 0.94).
+ *   Assumes zero mean.
  */
 export function ewmaDailyVolatility(
   returns: readonly number[],
-  { lambda, seedReturns = 1 }: { readonly lambda: number; readonly seedReturns?: number },
+  { lambda, start = defaultEwmaStart }: { readonly lambda: number; readonly start?: EwmaStart },
 ): number {
-  if (!(lambda > 0 && lambda < 1)) throw new DomainError('lambda-out-of-range', { lambda });
-  if (returns.length < seedReturns || seedReturns < 1) {
-    throw new DomainError('too-few-returns', { required: Math.max(1, seedReturns), received: returns.length });
+  requireLambda(lambda);
+  const { count } = start;
+  if (!(Number.isInteger(count) && count >= 1 && returns.length >= count)) {
+    throw new DomainError('too-few-returns', { required: Math.max(1, Math.ceil(count)), received: returns.length });
   }
+  const invalid = returns.findIndex((value) => !(Math.abs(value) <= 1e308));
+  if (invalid >= 0) throw new DomainError('value-invalid', { index: invalid, value: returns[invalid] ?? null });
+  const unit = scaleUnit(returns);
+  const squares = returns.map((value) => (unit === 1 ? value : value / unit) ** 2);
+  const variance =
+    start.kind === 'lastReturns' ? weightedMean(squares.slice(-count), lambda) : recursion(squares, lambda, count);
+  return Math.sqrt(variance) * unit;
+}
+
+function recursion(squares: readonly number[], lambda: number, count: number): number {
   let variance = 0;
-  for (const [index, value] of returns.entries()) {
-    if (!(Math.abs(value) < Infinity)) throw new DomainError('value-invalid', { index, value });
-    variance =
-      index < seedReturns ? variance + value ** 2 / seedReturns : lambda * variance + (1 - lambda) * value ** 2;
+  for (const [index, square] of squares.entries()) {
+    variance = index < count ? variance + square / count : lambda * variance + (1 - lambda) * square;
   }
-  return Math.sqrt(variance);
+  return variance;
+}
+
+function weightedMean(squares: readonly number[], lambda: number): number {
+  let sum = 0;
+  let weights = 0;
+  for (const square of squares) {
+    sum = lambda * sum + square;
+    weights = lambda * weights + 1;
+  }
+  return sum / weights;
 }
 
 /**
@@ -35,6 +65,10 @@ export function ewmaDailyVolatility(
  * @see Kish (1965), Survey Sampling: squared sum of weights over sum of squared weights.
  */
 export function ewmaEffectiveReturns(lambda: number): number {
-  if (!(lambda > 0 && lambda < 1)) throw new DomainError('lambda-out-of-range', { lambda });
+  requireLambda(lambda);
   return (1 + lambda) / (1 - lambda);
+}
+
+function requireLambda(lambda: number): void {
+  if (!(lambda > 0 && lambda < 1)) throw new DomainError('lambda-out-of-range', { lambda });
 }

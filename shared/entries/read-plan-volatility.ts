@@ -1,8 +1,8 @@
 import { DomainError } from '@/journal/errors/domain-error';
 import { type ForecastInput, type ForecastVolatility } from '@/journal/forecast/forecast-input';
 import { type ExchangeCalendar } from '@/journal/sessions/exchange-calendar';
-import { estimateVolatility } from '@/journal/volatility/estimate-volatility';
-import { type VolatilityMethod } from '@/journal/volatility/volatility-method';
+import { estimateCloseVolatility } from '@/journal/volatility/estimate-close-volatility';
+import { type CloseMethod } from '@/journal/volatility/volatility-method';
 import { type DraftPlan } from '@/shared/entries/draft-plan';
 import { readNumber, type Report } from '@/shared/entries/plan-problem';
 
@@ -27,9 +27,9 @@ export function readVolatility(
   if (spot === null) return null;
   // Only closes that were known at the moment of the spot price: a later upload must not leak into the plan.
   const known = bars.filter((bar) => (calendar.sessionOn(bar.sessionDate)?.closesAt ?? LATER) <= spot.at);
-  const method: VolatilityMethod = source === 'window' ? { kind: 'window', window } : { kind: 'ewma', lambda: 0.94 };
+  const method: CloseMethod = source === 'window' ? { kind: 'close', window } : { kind: 'ewma', lambda: 0.94 };
   try {
-    const { dailyVolatility, low, high } = estimateVolatility(
+    const { dailyVolatility, low, high } = estimateCloseVolatility(
       known.map((bar) => Number(bar.close)),
       method,
     );

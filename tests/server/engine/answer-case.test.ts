@@ -104,6 +104,15 @@ describe('volatility', () => {
     expect(lastThree).toEqual(resultOf(volatilityCommand, { closes: closes.slice(-4), method: 'close' }));
   });
 
+  it('estimates from the ranges of bars', () => {
+    // Worked values computed outside this project with Python.
+    const bars = [[50.1, 51, 49.8, 50.7]];
+    const volatilityBy = (method: string) => resultOf(volatilityCommand, { bars, method }).dailyVolatility;
+    expect(volatilityBy('parkinson')).toBeCloseTo(0.0143, 6);
+    expect(volatilityBy('garmanKlass')).toBeCloseTo(0.015124, 6);
+    expect(volatilityBy('rogersSatchell')).toBeCloseTo(0.014581, 6);
+  });
+
   it('weighs squared returns by lambda', () => {
     // One return of 1.5 % and then one of 2.4 %: 0.94 and 0.06 of their squares.
     const prices = [100, 100 * Math.exp(0.015), 100 * Math.exp(0.039)];
@@ -114,7 +123,9 @@ describe('volatility', () => {
   });
 
   it.each([
-    { input: { closes, method: 'parkinson' }, code: 'method-not-supported' },
+    { input: { closes, method: 'parkinson' }, code: 'bars-missing' },
+    { input: { bars: [[50, 49, 48, 49]], method: 'parkinson' }, code: 'bar-invalid' },
+    { input: { bars: [[50, 51, 48, 49]], method: 'yangZhang' }, code: 'too-few-bars' },
     { input: { closes, method: 'close', window: 6 }, code: 'too-few-returns' },
     { input: { closes: [50], method: 'close' }, code: 'too-few-returns' },
     { input: { closes: [50, -1, 50], method: 'close' }, code: 'close-invalid' },
