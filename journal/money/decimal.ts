@@ -30,7 +30,12 @@ export function toDecimal(text: DecimalText): Decimal {
   const isPlain = typeof text === 'string' && text.length <= greatestDigitCount + 2 && /^-?\d+(\.\d+)?$/.test(text);
   const isShort = isPlain && text.replace(/[-.]/g, '').length <= greatestDigitCount;
   if (!isShort) throw new DomainError('decimal-invalid', { text: String(text).slice(0, 60) });
-  return new Decimal(text).plus(0);
+  return withoutNegativeZero(new Decimal(text));
+}
+
+/** 0 for -0, and any other value as it is. */
+export function withoutNegativeZero(value: Decimal): Decimal {
+  return value.isZero() ? new Decimal(0) : value;
 }
 
 /**
@@ -58,5 +63,5 @@ export function toModelNumber(text: DecimalText): number {
  */
 export function fromModelNumber(value: number): Decimal {
   if (!Number.isFinite(value)) throw new DomainError('model-number-invalid', { value: String(value) });
-  return new Decimal(value).plus(0);
+  return withoutNegativeZero(new Decimal(value));
 }

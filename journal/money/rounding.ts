@@ -1,5 +1,5 @@
 import { DomainError } from '@/journal/errors/domain-error';
-import { Decimal } from '@/journal/money/decimal';
+import { Decimal, withoutNegativeZero } from '@/journal/money/decimal';
 
 /**
  * Rounds half to even, the mode of every amount shown or settled.
@@ -10,7 +10,7 @@ import { Decimal } from '@/journal/money/decimal';
 export function roundMoney(amount: Decimal, places = 2): Decimal {
   requirePlaces(places);
   if (!amount.isFinite()) throw new DomainError('amount-not-finite', { amount: amount.toString() });
-  return amount.toDecimalPlaces(places, Decimal.ROUND_HALF_EVEN).plus(0);
+  return withoutNegativeZero(amount.toDecimalPlaces(places, Decimal.ROUND_HALF_EVEN));
 }
 
 /**
