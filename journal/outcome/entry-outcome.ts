@@ -57,6 +57,8 @@ export interface MoveOutcome {
   readonly inSigmas: number;
   /** Place in the forecast distribution, 0 to 1. */
   readonly percentile: number;
+  /** The same in Student's t distribution, for a volatility estimated from few returns; null when it was typed. */
+  readonly studentPercentile: number | null;
 }
 
 export interface EntryOutcome {
@@ -71,6 +73,9 @@ export interface EntryOutcome {
   readonly moveSoFar: MoveOutcome | null;
   readonly realisedVolatility: {
     readonly dailyVolatility: number;
+    /** 95 % interval of the volatility that stood behind it. */
+    readonly low: number;
+    readonly high: number;
     readonly sessions: number;
     readonly ratio: number;
     /** Range within which the ratio falls 95 % of the time by chance alone; null when the volatility was typed. */

@@ -1,4 +1,5 @@
 import { normalCumulative } from '@/journal/distributions/normal-distribution';
+import { studentCumulative } from '@/journal/distributions/student-distribution';
 import { DomainError } from '@/journal/errors/domain-error';
 
 export interface RealisedMoveQuestion {
@@ -12,6 +13,8 @@ export interface RealisedMoveQuestion {
   readonly sessions: number;
   /** The forecast's mean of the log price change over the hold. */
   readonly logDrift: number;
+  /** Of the estimate of the volatility (returns less one where a mean was taken off), above 0; null when it is not an estimate. */
+  readonly degreesOfFreedom?: number | null;
 }
 
 export interface RealisedMove {
@@ -21,22 +24,27 @@ export interface RealisedMove {
   readonly inSigmas: number;
   /** Place of the end price in the forecast's lognormal distribution, with its drift, 0 to 1. */
   readonly percentile: number;
+  /** The same where the volatility is an estimate from few returns: in Student's t distribution. Null without degrees of freedom. */
+  readonly studentPercentile: number | null;
 }
 
 /**
  * Sets the move that came against the one that was forecast.
- * @throws {DomainError} `realised-move-invalid` with the inputs.
- * @see The probability integral transform of Dawid (1984), J. Royal Statistical Society A 147(2), 278-292, for the percentile.
+ * @throws {DomainError} `realised-move-invalid` with the inputs, `degrees-of-freedom-invalid`.
+ * @see The probability integral transform of Dawid (1984), J. Royal Statistical Society A 147(2), 278-292, for the percentile; Student's
+ *   t for a deviation whose scale is estimated from normal returns, any statistics text.
  */
 export function realisedMove(question: RealisedMoveQuestion): RealisedMove {
-  const { startPrice, endPrice, dailyVolatility, sessions, logDrift } = question;
+  const { startPrice, endPrice, dailyVolatility, sessions, logDrift, degreesOfFreedom = null } = question;
   const arePositive = [startPrice, endPrice, dailyVolatility, sessions].every((value) => value > 0 && value < Infinity);
   if (!(arePositive && Number.isFinite(logDrift))) throw new DomainError('realised-move-invalid', { ...question });
   const totalDeviation = dailyVolatility * Math.sqrt(sessions);
   const logReturn = Math.log(endPrice / startPrice);
+  const deviations = (logReturn - logDrift) / totalDeviation;
   return {
     logReturn,
     inSigmas: logReturn / totalDeviation,
-    percentile: normalCumulative((logReturn - logDrift) / totalDeviation),
+    percentile: normalCumulative(deviations),
+    studentPercentile: degreesOfFreedom === null ? null : studentCumulative(deviations, degreesOfFreedom),
   };
 }

@@ -1,5 +1,6 @@
 import { DomainError } from '@/journal/errors/domain-error';
 import { varianceRatioQuantile } from '@/journal/outcome/variance-ratio-quantile';
+import { volatilityInterval } from '@/journal/volatility/volatility-interval';
 
 /** One return of the hold. */
 export interface WeightedReturn {
@@ -8,30 +9,48 @@ export interface WeightedReturn {
   readonly sessions: number;
 }
 
+export interface RealisedVolatility {
+  /** Fraction per session, 0 or more. */
+  readonly dailyVolatility: number;
+  /** Sum of the returns' sessions. */
+  readonly sessions: number;
+  /** Full returns that carry as much information: their number where all cover the same time, fewer where they do not. */
+  readonly degreesOfFreedom: number;
+  /** Interval of the volatility that stood behind it. */
+  readonly low: number;
+  readonly high: number;
+  readonly confidence: number;
+}
+
 /**
  * Volatility that came over the hold: sqrt(sum of squared log returns / sum of sessions), with the mean taken as 0.
- * @param returns at least one.
- * @returns dailyVolatility as a fraction per session, 0 or more; sessions, their sum.
- * @throws {DomainError} `returns-missing`, `return-invalid` with the index.
- * @see Common practice: over a short hold the mean is too poorly known to be taken off.
+ * @param returns at least one. @param confidence above 0 and below 1; 0.95 by default.
+ * @throws {DomainError} `returns-missing`, `return-invalid` with the index, `confidence-out-of-range`,
+ *   `volatility-invalid` when the squares are beyond every double.
+ * @see Common practice: over a short hold the mean is too poorly known to be taken off. The interval is that of chi-square, with
+ *   (sum of weights)² / (sum of squared weights) degrees of freedom: Satterthwaite (1946), Biometrics Bulletin 2(6), 110-114; normal
+ *   independent returns, and fat tails widen it.
  */
-export function realisedVolatility(returns: readonly WeightedReturn[]): { dailyVolatility: number; sessions: number } {
+export function realisedVolatility(returns: readonly WeightedReturn[], confidence = 0.95): RealisedVolatility {
   if (returns.length === 0) throw new DomainError('returns-missing');
-  let squares = 0;
-  let total = 0;
+  let [squares, total, squaredWeights] = [0, 0, 0];
   for (const [index, { logReturn, sessions }] of returns.entries()) {
     const isValid = Number.isFinite(logReturn) && sessions > 0 && sessions < Infinity;
     if (!isValid) throw new DomainError('return-invalid', { index, logReturn, sessions });
     squares += logReturn ** 2;
     total += sessions;
+    squaredWeights += sessions ** 2;
   }
-  return { dailyVolatility: Math.sqrt(squares / total), sessions: total };
+  const dailyVolatility = Math.sqrt(squares / total);
+  const degreesOfFreedom = total ** 2 / squaredWeights;
+  const interval = volatilityInterval({ dailyVolatility, degreesOfFreedom, confidence });
+  return { dailyVolatility, sessions: total, degreesOfFreedom, ...interval, confidence };
 }
 
 /**
  * The range in which realised volatility / estimated volatility falls by chance alone when the true volatility never changed:
  * both are estimates, and their squared ratio follows the F distribution.
- * @param returnsRealised number of returns of the hold, above 0. @param degreesOfFreedom of the estimate (returns less one), above 0.
+ * @param returnsRealised full returns of the hold, above 0; fractions allowed. @param degreesOfFreedom of the estimate (returns less one), above 0.
  * @param confidence above 0 and below 1; 0.95 by default.
  * @throws {DomainError} `confidence-invalid`, `variance-ratio-invalid`.
  * @see The F ratio of two normal sample variances, any statistics text. Independent normal returns: fat tails widen it.

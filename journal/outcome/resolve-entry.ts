@@ -111,9 +111,9 @@ function moveTo(model: PlanModel, seen: ObservedPrice | undefined, calendar: Exc
     dailyVolatility: input.volatility.base,
     sessions,
     logDrift: drift,
+    degreesOfFreedom: volatilityDegrees(input.volatility),
   });
-  const { logReturn, inSigmas, percentile } = move;
-  return { sessionDate, pricedBy, sessions, startPrice: spotPrice, endPrice, logReturn, inSigmas, percentile };
+  return { sessionDate, pricedBy, sessions, startPrice: spotPrice, endPrice, ...move };
 }
 
 function volatilityOver(
@@ -133,12 +133,13 @@ function volatilityOver(
     lastPrice = price;
   }
   if (returns.length === 0) return null;
-  const { dailyVolatility, sessions } = realisedVolatility(returns);
+  const { dailyVolatility, low, high, sessions, degreesOfFreedom: returnsRealised } = realisedVolatility(returns);
   const degreesOfFreedom = volatilityDegrees(input.volatility);
-  const range =
-    degreesOfFreedom === null ? null : volatilityRatioRange({ returnsRealised: returns.length, degreesOfFreedom });
+  const range = degreesOfFreedom === null ? null : volatilityRatioRange({ returnsRealised, degreesOfFreedom });
   return {
     dailyVolatility,
+    low,
+    high,
     sessions,
     ratio: dailyVolatility / input.volatility.base,
     ratioLow: range?.low ?? null,

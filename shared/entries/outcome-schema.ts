@@ -14,6 +14,7 @@ const moveSchema = z.strictObject({
   logReturn: number,
   inSigmas: number,
   percentile: number,
+  studentPercentile: number.nullable().default(null),
 });
 
 /** Expected against realised for one entry (journal/outcome/entry-outcome). */
@@ -24,6 +25,8 @@ export const entryOutcomeSchema = z.strictObject({
   realisedVolatility: z
     .strictObject({
       dailyVolatility: number,
+      low: number.nullable().default(null),
+      high: number.nullable().default(null),
       sessions: number,
       ratio: number,
       ratioLow: number.nullable(),

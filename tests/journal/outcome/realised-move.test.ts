@@ -10,6 +10,14 @@ describe('realisedMove', () => {
     expect(percentile).toBeCloseTo(0.819, 3);
   });
 
+  it('puts it at place 0.813 when the volatility comes from 20 returns, and at none when it is no estimate', () => {
+    expect(realisedMove({ ...question, degreesOfFreedom: 19 }).studentPercentile).toBeCloseTo(0.813, 3);
+    expect(realisedMove(question).studentPercentile).toBeNull();
+    expect(() => realisedMove({ ...question, degreesOfFreedom: 0 })).toThrow(
+      expect.objectContaining({ code: 'degrees-of-freedom-invalid' }),
+    );
+  });
+
   it('puts 4000 to 4021.50 in 0.3769 sessions of 0.90 % at 0.970 sigmas', () => {
     const move = { startPrice: 4000, endPrice: 4021.5, dailyVolatility: 0.009, sessions: 0.376923, logDrift: 0 };
     expect(realisedMove(move).inSigmas).toBeCloseTo(0.97, 3);

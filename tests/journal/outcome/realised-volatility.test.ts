@@ -22,7 +22,20 @@ describe('realisedVolatility', () => {
   });
 
   it('is 0 when no price moved', () => {
-    expect(realisedVolatility(fullSessions([0, 0])).dailyVolatility).toBe(0);
+    expect(realisedVolatility(fullSessions([0, 0]))).toMatchObject({ dailyVolatility: 0, low: 0, high: 0 });
+  });
+
+  it('has the chi-square interval of its number of returns, none taken off for a mean', () => {
+    // Chi-square with 5 degrees of freedom: 0.831212 at 2.5 % and 12.832502 at 97.5 %, any table.
+    const { low, high, degreesOfFreedom, confidence } = realisedVolatility(fullSessions([0.8, -1.6, 2.4, 0.3, -1.1]));
+    expect([degreesOfFreedom, confidence]).toEqual([5, 0.95]);
+    expect(low).toBeCloseTo(0.0143248 * Math.sqrt(5 / 12.832502), 6);
+    expect(high).toBeCloseTo(0.0143248 * Math.sqrt(5 / 0.831212), 6);
+  });
+
+  it('counts fewer degrees of freedom than returns when they cover unequal times', () => {
+    const returns = [1, 1, 0.3].map((sessions) => ({ logReturn: 0.01, sessions }));
+    expect(realisedVolatility(returns).degreesOfFreedom).toBeCloseTo(2.3 ** 2 / 2.09, 12);
   });
 
   it('grows with the size of the returns and not with their sign (property)', () => {
