@@ -116,13 +116,16 @@ describe('scenario 3, the bull put that was bought back at half', () => {
     fillOf(input, 1, { kind: 'sell', quantity: '1', price: '0.15', fees: '0.66', tradedAt: at }),
   ];
 
-  it('states 20.3% in the money, 83.7% profit, mean +24.09 and 39.9% for a touch of 57', () => {
+  it('states 20.3% in the money, 83.7% profit, mean +24.09, 39.9% for a touch of 57 and at most 149.32 to lose', () => {
     const forecast = makeForecast(input, usOptionsCalendar);
     expect(forecast.sessions.toExpiry).toBe(21);
     expect(forecast.odds[0]?.probability.base).toBeCloseTo(0.203, 3);
     expect(forecast.atExpiry.oddsOfProfit.base).toBeCloseTo(0.837, 3);
     expect(forecast.atExpiry.mean.base).toBeCloseTo(24.09, 2);
     expect(forecast.odds.find(({ key }) => key === 'touch-stop')?.probability.base).toBeCloseTo(0.399, 3);
+    expect(forecast.cost.modelValue.base / -100).toBeCloseTo(0.2659, 4);
+    expect(forecast.ends.greatestLoss).toBeCloseTo(-149.32, 2);
+    expect(forecast.ends.oddsOfGreatestLoss).toBeCloseTo(0.076, 3);
   });
 
   it('is flat at +23.36 while the odds still wait for expiry', () => {

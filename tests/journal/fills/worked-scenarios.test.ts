@@ -1,0 +1,53 @@
+import { type Fill } from '@/journal/fills/fill';
+import { matchLots } from '@/journal/fills/lots';
+import { sharesFromExercise } from '@/journal/fills/underlying-shares';
+import { fillsInOrder, option } from '@/tests/journal/fills/fill-fixtures';
+
+const methods = ['fifo', 'lifo', 'average'] as const;
+const stock = (symbol: string) => ({ kind: 'stock' as const, symbol, multiplier: '1' as const });
+
+// Amounts worked outside this project.
+describe('a covered call assigned early', () => {
+  const call = option('call', '50', { underlyingSymbol: 'XJKO' });
+  const opened = fillsInOrder([
+    { kind: 'buy', instrument: stock('XJKO'), quantity: '100', price: '51.20', fees: '0' },
+    { kind: 'sell', instrument: call, quantity: '1', price: '2.90', fees: '0.66' },
+    { kind: 'assignment', instrument: call, quantity: '1', price: '0', fees: '0' },
+  ]);
+  const [, , assignment] = opened as [Fill, Fill, Fill];
+  const fills = [...opened, { ...sharesFromExercise(assignment, { id: 'shares' }), sequence: 4 }];
+
+  it.each(methods)('sells the shares at 50 and makes 169.34, without the dividend, by %s', (method) => {
+    const { closed, realisedProfit, open } = matchLots(fills, { method });
+    expect(closed.map((lot) => [lot.closeKind, lot.realisedProfit])).toEqual([
+      ['assignment', '289.34'],
+      ['sell', '-120'],
+    ]);
+    expect([realisedProfit, open]).toEqual(['169.34', []]);
+  });
+});
+
+describe('three short calls pinned at the strike, two of them assigned', () => {
+  const call = option('call', '50', { underlyingSymbol: 'RQUV' });
+  const closeAt = '2026-12-18T21:00:00.000Z';
+  const fills = fillsInOrder([
+    { kind: 'sell', instrument: call, quantity: '3', price: '0.35', fees: '1.98' },
+    { kind: 'assignment', instrument: call, quantity: '2', price: '0', fees: '0', tradedAt: closeAt },
+    { kind: 'expiry', instrument: call, quantity: '1', price: '0', fees: '0', tradedAt: closeAt },
+  ]);
+  const [, assignment] = fills as [Fill, Fill, Fill];
+  const shares = { ...sharesFromExercise(assignment, { id: 'shares' }), sequence: 4 };
+  const back: Fill = { ...shares, id: 'back', kind: 'buy', price: '51.10', tradedAt: '2026-12-21T14:30:00.000Z' };
+
+  it('leave 200 shares short over the weekend', () => {
+    expect(matchLots([...fills, shares], { method: 'fifo' }).open).toMatchObject([
+      { instrument: stock('RQUV'), direction: 'short', quantity: '200', price: '50' },
+    ]);
+  });
+
+  it.each(methods)('lose 116.98 in all once they are bought back at 51.10, by %s', (method) => {
+    const { closed, realisedProfit, open } = matchLots([...fills, shares, back], { method });
+    expect(closed.map((lot) => lot.realisedProfit)).toEqual(['68.68', '34.34', '-220']);
+    expect([realisedProfit, open]).toEqual(['-116.98', []]);
+  });
+});
