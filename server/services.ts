@@ -14,6 +14,7 @@ import { EngineService } from '@/server/engine/engine-service';
 import { EntryDescriber } from '@/server/entries/describe-entry';
 import { entryHandlers } from '@/server/entries/entry-handlers';
 import { EntryService } from '@/server/entries/entry-service';
+import { ExportService } from '@/server/exports/export-service';
 import { FillService } from '@/server/fills/fill-service';
 import { OutcomeService } from '@/server/outcomes/outcome-service';
 import { type HandlersOf } from '@/server/http/handler';
@@ -63,6 +64,7 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
   const seals = new SealService({ clock, ids, outcomes });
   const fills = new FillService({ clock, ids, outcomes });
   const scores = new ScoreService(describer);
+  const exports = new ExportService({ describer, clock });
   const engine = new EngineService();
   const today = new TodayService({ clock, entries, underlyings, scores });
 
@@ -74,6 +76,7 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
     ...entryHandlers({ entries, seals, fills }),
     readToday: ({ scope }) => today.read(scope),
     readScores: ({ scope }) => scores.read(scope),
+    exportJournal: async ({ scope, query }) => exports.journal(scope, query),
     computeCases: ({ person, params, body }) =>
       engine.compute(person.id, { command: params.command, cases: body.cases }),
   };

@@ -29,9 +29,10 @@ export interface CallInput<E extends Endpoint> {
 export async function call<E extends Endpoint>(endpoint: E, input: CallInput<E> = {}): Promise<ResponseOf<E>> {
   const answer = await send(endpoint, input);
   if (answer.ok) {
-    const json: unknown = endpoint.response === null ? undefined : await answer.json();
+    const { response } = endpoint;
     // The schema is the endpoint's own, so what it gives is ResponseOf<E>; TypeScript cannot follow the conditional type.
-    return (endpoint.response === null ? undefined : endpoint.response.parse(json)) as ResponseOf<E>;
+    if (response === null || response === 'stream') return undefined as ResponseOf<E>;
+    return response.parse(await answer.json()) as ResponseOf<E>;
   }
   throw await readError(answer);
 }
@@ -59,6 +60,14 @@ async function send<E extends Endpoint>(
     if (error instanceof DOMException && error.name === 'AbortError') throw error;
     throw unreachable();
   }
+}
+
+/** The address of an endpoint that is opened as a link, such as a file to save. */
+export function linkTo<E extends Endpoint>(
+  endpoint: E,
+  { params, query }: Pick<CallInput<E>, 'params' | 'query'>,
+): string {
+  return urlOf(endpoint, params, query);
 }
 
 function urlOf(endpoint: Endpoint, params: unknown, query: unknown): string {

@@ -22,20 +22,20 @@ export class FillStore {
   /** Oldest first. */
   async list(entryId: string): Promise<StoredFill[]> {
     const rows = await this.rows.find({ entryId }, { order: { tradedAt: 'ASC', sequence: 'ASC' } });
-    return rows.map((row) => ({
-      fill: {
-        id: row.id,
-        kind: row.kind,
-        instrument: row.instrument,
-        quantity: plain(row.quantity),
-        price: plain(row.price),
-        fees: plain(row.fees),
-        tradedAt: row.tradedAt.toISOString(),
-        sequence: row.sequence,
-      },
-      timeZone: row.timeZone,
-      madeBy: row.madeBy,
-    }));
+    return rows.map(storedFill);
+  }
+
+  /** The fills of several entries by the entry's id, oldest first. */
+  async listOf(entryIds: readonly string[]): Promise<Map<string, StoredFill[]>> {
+    const rows = await this.rows
+      .query('fill')
+      .andWhere('fill.entryId IN (:...entryIds)', { entryIds })
+      .orderBy('fill.tradedAt')
+      .addOrderBy('fill.sequence')
+      .getMany();
+    const byEntry = new Map(entryIds.map((id) => [id, new Array<StoredFill>()]));
+    for (const row of rows) byEntry.get(row.entryId)?.push(storedFill(row));
+    return byEntry;
   }
 
   find(id: string): Promise<FillEntity | null> {
@@ -50,4 +50,21 @@ export class FillStore {
   async remove(entryId: string, id: string): Promise<number> {
     return (await this.rows.remove({ entryId, madeBy: id })) + (await this.rows.remove({ entryId, id }));
   }
+}
+
+function storedFill(row: FillEntity): StoredFill {
+  return {
+    fill: {
+      id: row.id,
+      kind: row.kind,
+      instrument: row.instrument,
+      quantity: plain(row.quantity),
+      price: plain(row.price),
+      fees: plain(row.fees),
+      tradedAt: row.tradedAt.toISOString(),
+      sequence: row.sequence,
+    },
+    timeZone: row.timeZone,
+    madeBy: row.madeBy,
+  };
 }

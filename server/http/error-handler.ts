@@ -12,6 +12,8 @@ const RETRY_SECONDS = '5';
 export function errorHandler(logger: Logger): ErrorRequestHandler {
   return (error: unknown, request, response, next) => {
     if (response.headersSent) {
+      const hasLeft = error instanceof Error && 'code' in error && error.code === 'ERR_STREAM_PREMATURE_CLOSE';
+      if (!hasLeft) logger.error({ requestId: requestIdOf(request), error: describeFailure(error) }, 'answer cut');
       next(error);
       return;
     }

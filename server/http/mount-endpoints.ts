@@ -7,6 +7,7 @@ import { readBody } from '@/server/http/read-body';
 import { readInput } from '@/server/http/read-input';
 import { fileOf, receiveFile } from '@/server/http/receive-file';
 import { noteFacts } from '@/server/http/request-facts';
+import { sendFile } from '@/server/http/send-file';
 import { requestIdOf } from '@/server/http/request-id';
 import { type PersonEntity } from '@/server/people/person-entity';
 import { type Endpoint } from '@/shared/contract/define-endpoint';
@@ -110,6 +111,7 @@ function answer(endpoint: Endpoint, handler: AnyHandler): RequestHandler {
     // The table ties each handler's context to its endpoint's schemas; here they are met as one family.
     const result = await handler(context as never);
     if (endpoint.response === null) response.status(endpoint.status).end();
+    else if (endpoint.response === 'stream') await sendFile(response, result);
     else response.status(endpoint.status).json(endpoint.response.parse(result));
   };
 }

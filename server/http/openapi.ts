@@ -50,10 +50,16 @@ function operationOf(endpoint: Endpoint): object {
           }
         : { requestBody: { required: true, content: { 'application/json': { schema: input(body) } } } }),
     responses: {
-      [status]: response === null ? { description: 'Done' } : { description: 'Done', content: json(response) },
+      [status]: { description: 'Done', ...contentOf(response) },
       default: { description: 'Refused', content: json(apiErrorSchema) },
     },
   };
+}
+
+function contentOf(response: Endpoint['response']): object {
+  if (response === null) return {};
+  const file = { '*/*': { schema: { type: 'string', format: 'binary' } } };
+  return { content: response === 'stream' ? file : json(response) };
 }
 
 function parametersOf(schema: z.ZodType, place: 'path' | 'query'): object[] {

@@ -74,6 +74,24 @@ export class SealStore {
     return content === null ? null : { link, content: payloadOf(content.payload) };
   }
 
+  /** The seals of several entries, by the entry's id. */
+  async findByEntries(entryIds: readonly string[]): Promise<Map<string, StoredSeal>> {
+    const links = await this.links.query('link').andWhere('link.entryId IN (:...entryIds)', { entryIds }).getMany();
+    if (links.length === 0) return new Map();
+    const contents = await this.scope
+      .repository(SealedContentEntity)
+      .query('content')
+      .andWhere('content.forecastId IN (:...ids)', { ids: links.map(({ id }) => id) })
+      .getMany();
+    const payloads = new Map(contents.map(({ forecastId, payload }) => [forecastId, payload]));
+    return new Map(
+      links.flatMap((link) => {
+        const payload = payloads.get(link.id);
+        return payload === undefined ? [] : [[link.entryId, { link, content: payloadOf(payload) }] as const];
+      }),
+    );
+  }
+
   /** What was written must read back as what was hashed, or the seal is not made. */
   private async assertStored(forecastId: string): Promise<void> {
     const link = await this.links.get(forecastId);

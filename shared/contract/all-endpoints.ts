@@ -2,6 +2,7 @@ import { accountEndpoints } from '@/shared/account/account-endpoints';
 import { deskEndpoints } from '@/shared/desk/desk-endpoints';
 import { engineEndpoints } from '@/shared/engine/engine-endpoints';
 import { entryEndpoints } from '@/shared/entries/entry-endpoints';
+import { exportEndpoints } from '@/shared/exports/export-endpoints';
 import { priceUploadEndpoints } from '@/shared/prices/price-upload-endpoints';
 import { scoreEndpoints } from '@/shared/scores/score-endpoints';
 import { todayEndpoints } from '@/shared/today/today-endpoints';
@@ -17,4 +18,5 @@ export const allEndpoints = {
   ...todayEndpoints,
   ...scoreEndpoints,
   ...engineEndpoints,
+  ...exportEndpoints,
 };

@@ -26,8 +26,8 @@ export interface Endpoint {
   /** Writes that must name the version they were made from (header If-Match). */
   readonly needsVersion: boolean;
   readonly status: 200 | 201 | 204;
-  /** null with status 204. */
-  readonly response: z.ZodType | null;
+  /** null with status 204; 'stream' for a file that is written as it is made. */
+  readonly response: z.ZodType | null | 'stream';
 }
 
 /** Declares an endpoint; the value is its own type, so params, body and response are inferred from it. */
@@ -51,7 +51,17 @@ type DeepReadonly<T> = T extends readonly (infer Item)[]
   : T extends object
     ? { readonly [Key in keyof T]: DeepReadonly<T[Key]> }
     : T;
+/** A file that is written while it is made. */
+export interface StreamedFile {
+  readonly fileName: string;
+  readonly contentType: string;
+  /** Pieces in order; what cannot be made ends the answer in the middle, so that no half file looks whole. */
+  readonly pieces: AsyncIterable<string | Uint8Array>;
+}
+
 /** What a handler may return: the response before it is parsed, its arrays and objects allowed to be readonly. */
 export type AnswerOf<E extends Endpoint> = E['response'] extends z.ZodType
   ? DeepReadonly<z.input<E['response']>>
-  : undefined;
+  : E['response'] extends 'stream'
+    ? StreamedFile
+    : undefined;
