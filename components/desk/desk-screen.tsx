@@ -4,6 +4,7 @@ import { DeskSettingsCard } from '@/components/desk/desk-settings-card';
 import { ProfileCard } from '@/components/desk/profile-card';
 import { ScreenFrame } from '@/components/frame/screen-frame';
 import { UnreadyScreen } from '@/components/frame/unready-screen';
+import { FileLinks } from '@/components/take-away/file-links';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { ChoiceRow } from '@/components/ui/choice-row';
@@ -52,6 +53,9 @@ function DeskBody({ me, desk }: { me: Me; desk: Desk }) {
       >
         <View style={column}>
           <ProfileCard me={me} />
+          <Card title="Take it away" subtitle="Every entry you may read, with forecasts, odds, fills and outcomes">
+            <FileLinks />
+          </Card>
           <Desks me={me} />
         </View>
         <View style={column}>

@@ -4,6 +4,7 @@ import { FlatList, View, type ViewStyle } from 'react-native';
 import { LandingStripKey } from '@/components/charts/landing-strip';
 import { EntryRowCard } from '@/components/journal/entry-row-card';
 import { JournalFilters } from '@/components/journal/journal-filters';
+import { FileLinks } from '@/components/take-away/file-links';
 import { Button } from '@/components/ui/button';
 import { Rule } from '@/components/ui/rule';
 import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
@@ -101,7 +102,11 @@ export function JournalList({ chosenId }: { chosenId: string | null }) {
         ) : rows.length > 0 && !entries.hasNextPage ? (
           <View style={{ paddingTop: 12, gap: 12 }}>
             <Rule />
-            <Txt size="note" colour="inkSoft">{`${rows.length} ${rows.length === 1 ? 'entry' : 'entries'}`}</Txt>
+            <Txt
+              size="note"
+              colour="inkSoft"
+            >{`${rows.length} ${rows.length === 1 ? 'entry' : 'entries'}. Take ${rows.length === 1 ? 'it' : 'them'} away as a file:`}</Txt>
+            <FileLinks filter={filter} />
           </View>
         ) : null
       }
