@@ -4,6 +4,7 @@ import { seededRandom } from '@/journal/random/seeded-random';
 import { quantile } from '@/journal/returns/quantile';
 import { byCluster } from '@/journal/scoring/clusters';
 import { requireConfidence } from '@/journal/scoring/hit-count';
+import { requireScoreValues } from '@/journal/scoring/score-values';
 
 export interface ClusteredMean {
   readonly mean: number;
@@ -16,8 +17,8 @@ export interface ClusteredMean {
 
 /**
  * Mean of values of which those of one cluster may move together, with a standard error that allows for it.
- * @param values finite, at least one. @param clusters one label a value; all different for independent values.
- * @throws {DomainError} `values-missing`, `value-not-finite`, `clusters-not-matching`.
+ * @param values from -1e100 to 1e100, at least one. @param clusters one label a value; all different for independent values.
+ * @throws {DomainError} `values-missing`, `value-out-of-range`, `clusters-not-matching`.
  * @see Liang and Zeger (1986), Biometrika 73(1), 13-22, with the factor G / (G - 1) of common practice.
  */
 export function clusteredMean(values: readonly number[], clusters: readonly number[]): ClusteredMean {
@@ -87,9 +88,7 @@ export function clusterBootstrapInterval(
 }
 
 function clusterSums(values: readonly number[], clusters: readonly number[]): { sum: number; count: number }[] {
-  for (const [index, value] of values.entries()) {
-    if (!Number.isFinite(value)) throw new DomainError('value-not-finite', { index });
-  }
+  requireScoreValues(values);
   return byCluster(values, clusters).map((group) => ({
     sum: group.reduce((sum, value) => sum + value, 0),
     count: group.length,

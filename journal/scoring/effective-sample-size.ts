@@ -1,5 +1,6 @@
 import { DomainError } from '@/journal/errors/domain-error';
 import { byCluster } from '@/journal/scoring/clusters';
+import { requireScoreValues } from '@/journal/scoring/score-values';
 
 /**
  * How many independent cases a clustered sample is worth: n / (1 + (m - 1) x rho).
@@ -22,17 +23,15 @@ export function effectiveSampleSize(clusterSizes: readonly number[], correlation
 
 /**
  * Correlation of two values of one cluster, from the spread between and inside clusters.
- * @param values finite, at least one. @param clusters one label a value.
+ * @param values from -1e100 to 1e100, at least one. @param clusters one label a value.
  * @returns 0 to 1: a negative estimate says that clusters do not matter and becomes 0. Null when it cannot be told: a single cluster,
  *   no cluster with two values, or no spread at all.
- * @throws {DomainError} `values-missing`, `value-not-finite`, `clusters-not-matching`.
+ * @throws {DomainError} `values-missing`, `value-out-of-range`, `clusters-not-matching`.
  * @see One-way analysis of variance: Fisher (1925), Statistical Methods for Research Workers, chapter VII; for unequal sizes Donner
  *   (1986), International Statistical Review 54(1), 67-82 (from memory).
  */
 export function intraclassCorrelation(values: readonly number[], clusters: readonly number[]): number | null {
-  for (const [index, value] of values.entries()) {
-    if (!Number.isFinite(value)) throw new DomainError('value-not-finite', { index });
-  }
+  requireScoreValues(values);
   const groups = byCluster(values, clusters);
   const { length: count } = values;
   if (groups.length < 2 || groups.length === count) return null;

@@ -1,14 +1,18 @@
 import { DomainError } from '@/journal/errors/domain-error';
 import { requireProbability } from '@/journal/scoring/hit-count';
 
+/** The list of probabilities has one entry a count. */
+const MOST_EVENTS = 1_000_000;
+
 /**
  * Probabilities of 0, 1, ... count events among independent events of one probability (binomial).
- * @param count whole number from 0.
+ * @param count whole number from 0 to 1,000,000.
  * @param probability 0 to 1.
  * @throws {DomainError} `count-invalid`, `probability-invalid`.
  */
 export function binomialProbabilities({ count, probability }: { count: number; probability: number }): number[] {
-  if (!(Number.isInteger(count) && count >= 0)) throw new DomainError('count-invalid', { count });
+  if (!(Number.isInteger(count) && count >= 0 && count <= MOST_EVENTS))
+    throw new DomainError('count-invalid', { count });
   requireProbability(probability);
   const mode = Math.min(count, Math.floor((count + 1) * probability));
   // Outwards from the mode each term follows from its neighbour; dividing by their sum needs no factorials.

@@ -96,7 +96,7 @@ describe('clusteredMean', () => {
     expect(clusteredMean([2, 2], [0, 1])).toMatchObject({ standardError: 0, pValue: null });
     expect(() => clusteredMean([], [])).toThrow(expect.objectContaining({ code: 'values-missing' }));
     expect(() => clusteredMean([1], [])).toThrow(expect.objectContaining({ code: 'clusters-not-matching' }));
-    expect(() => clusteredMean([NaN], [0])).toThrow(expect.objectContaining({ code: 'value-not-finite' }));
+    expect(() => clusteredMean([NaN], [0])).toThrow(expect.objectContaining({ code: 'value-out-of-range' }));
     expect(() => comparePaired({ scores: [1], otherScores: [], clusters: [0] })).toThrow(
       expect.objectContaining({ code: 'scores-not-matching' }),
     );
