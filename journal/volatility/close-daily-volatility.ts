@@ -1,5 +1,5 @@
 import { DomainError } from '@/journal/errors/domain-error';
-import { sampleStatistics } from '@/journal/returns/sample-statistics';
+import { centredSample, rootMeanSquare } from '@/journal/returns/centred-sample';
 
 /**
  * Daily volatility of log returns, close to close.
@@ -16,8 +16,7 @@ export function closeDailyVolatility(
 ): number {
   const required = mean === 'sample' ? 2 : 1;
   if (returns.length < required) throw new DomainError('too-few-returns', { required, received: returns.length });
-  // A second look at a single return does not change its root mean square.
-  const values = returns.length === 1 ? [...returns, ...returns] : returns;
-  const { standardDeviation, rootMeanSquare } = sampleStatistics(values);
-  return mean === 'sample' ? standardDeviation : rootMeanSquare;
+  if (mean === 'zero') return rootMeanSquare(returns);
+  const { count, unit, squares } = centredSample(returns);
+  return Math.sqrt(squares / (count - 1)) * unit;
 }

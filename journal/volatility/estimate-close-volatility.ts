@@ -1,6 +1,6 @@
 import { DomainError } from '@/journal/errors/domain-error';
 import { logReturns } from '@/journal/returns/log-returns';
-import { sampleStatistics } from '@/journal/returns/sample-statistics';
+import { centredSample } from '@/journal/returns/centred-sample';
 import { closeDailyVolatility } from '@/journal/volatility/close-daily-volatility';
 import { ewmaDailyVolatility, ewmaEffectiveReturns } from '@/journal/volatility/ewma-daily-volatility';
 import { volatilityInterval } from '@/journal/volatility/volatility-interval';
@@ -43,7 +43,7 @@ export function estimateCloseVolatility(
   return {
     method,
     dailyVolatility,
-    mean: hasZeroMean ? 0 : sampleStatistics(returns).mean,
+    mean: hasZeroMean ? 0 : centredSample(returns).mean,
     ...volatilityInterval({ dailyVolatility, degreesOfFreedom, confidence }),
     confidence,
     degreesOfFreedom,

@@ -1,4 +1,5 @@
 import { DomainError } from '@/journal/errors/domain-error';
+import { requireMagnitude } from '@/journal/returns/centred-sample';
 import { scaleUnit } from '@/journal/returns/scale-unit';
 
 /** What the weighted variance starts from. */
@@ -30,8 +31,7 @@ export function ewmaDailyVolatility(
   if (!(Number.isInteger(count) && count >= 1 && returns.length >= count)) {
     throw new DomainError('too-few-returns', { required: Math.max(1, Math.ceil(count)), received: returns.length });
   }
-  const invalid = returns.findIndex((value) => !(Math.abs(value) <= 1e308));
-  if (invalid >= 0) throw new DomainError('value-invalid', { index: invalid, value: returns[invalid] ?? null });
+  requireMagnitude(returns, 1e308);
   const unit = scaleUnit(returns);
   const squares = returns.map((value) => (unit === 1 ? value : value / unit) ** 2);
   const variance =

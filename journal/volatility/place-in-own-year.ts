@@ -5,8 +5,11 @@ import { closeDailyVolatility } from '@/journal/volatility/close-daily-volatilit
 export interface PlaceInOwnYear {
   /** Share of the past values at or below the current one, 0 to 100. */
   readonly percentile: number;
+  readonly fifthPercentile: number;
   readonly lowerQuartile: number;
+  readonly median: number;
   readonly upperQuartile: number;
+  readonly ninetyFifthPercentile: number;
   readonly lowest: number;
   readonly highest: number;
   readonly current: number;
@@ -14,7 +17,7 @@ export interface PlaceInOwnYear {
   readonly count: number;
 }
 
-const SESSIONS_IN_A_YEAR = 252;
+export const SESSIONS_IN_A_YEAR = 252;
 const FEWEST_VALUES = 20;
 
 /**
@@ -32,13 +35,26 @@ export function placeInOwnYear(closes: readonly number[], window = 21): PlaceInO
   for (let end = window; end <= returns.length; end += 1) {
     values.push(closeDailyVolatility(returns.slice(end - window, end), { mean: 'sample' }));
   }
-  const current = values.at(-1) ?? 0;
+  return placeAmong(values);
+}
+
+/**
+ * Where the last of some values stands among them all; quantiles of type 7.
+ * @param values finite, oldest first. @returns null with fewer than 20.
+ * @see common practice.
+ */
+export function placeAmong(values: readonly number[]): PlaceInOwnYear | null {
+  const current = values.at(-1);
+  if (current === undefined || values.length < FEWEST_VALUES) return null;
   return {
     percentile: (100 * values.filter((value) => value <= current).length) / values.length,
+    fifthPercentile: quantile(values, 0.05),
     lowerQuartile: quantile(values, 0.25),
+    median: quantile(values, 0.5),
     upperQuartile: quantile(values, 0.75),
-    lowest: Math.min(...values),
-    highest: Math.max(...values),
+    ninetyFifthPercentile: quantile(values, 0.95),
+    lowest: quantile(values, 0),
+    highest: quantile(values, 1),
     current,
     count: values.length,
   };

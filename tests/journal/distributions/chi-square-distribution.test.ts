@@ -43,6 +43,11 @@ describe('chi-square distribution', () => {
     );
   });
 
+  it('has the quantiles of scipy 1.17.1 past a million degrees', () => {
+    expect(relativeError(chiSquareQuantile(0.025, 4e6), 3994458.2792516043)).toBeLessThanOrEqual(1e-13);
+    expect(relativeError(chiSquareQuantile(0.975, 4e6), 4005545.5093600205)).toBeLessThanOrEqual(1e-13);
+  });
+
   it('has nothing below 0', () => {
     expect(chiSquareCumulative(0, 5)).toBe(0);
     expect(chiSquareCumulative(-1, 5)).toBe(0);
