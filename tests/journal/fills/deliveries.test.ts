@@ -4,37 +4,12 @@ import { type Fill } from '@/journal/fills/fill';
 import { matchLots } from '@/journal/fills/lots';
 import { premiumInBasis } from '@/journal/fills/premium-in-basis';
 import { sharesFromExercise } from '@/journal/fills/underlying-shares';
-import { fillsInOrder, option, zqxaStock } from '@/tests/journal/fills/fill-fixtures';
+import { assignedPutSpread, fillsInOrder, option, zqxaStock } from '@/tests/journal/fills/fill-fixtures';
 
 const seed = 20261201;
 const methods = ['fifo', 'lifo', 'average'] as const;
-const [shortPut, longPut] = [option('put', '97'), option('put', '95')];
-
-// Worked outside this project: sell 97 put at 0.78, buy 95 put at 0.30, 0.66 each; settles 96.20; 100 shares sold at 96.55, fee 0.02.
-const [soldPut, boughtPut, expired] = fillsInOrder([
-  { kind: 'sell', instrument: shortPut, quantity: '1', price: '0.78', fees: '0.66' },
-  { kind: 'buy', instrument: longPut, quantity: '1', price: '0.30', fees: '0.66' },
-  { kind: 'expiry', instrument: longPut, quantity: '1', price: '0', fees: '0', tradedAt: '2026-12-18T21:00:00.000Z' },
-]) as [Fill, Fill, Fill];
-const assigned: Fill = {
-  ...soldPut,
-  id: 'assigned',
-  kind: 'assignment',
-  price: '0',
-  fees: '0',
-  tradedAt: '2026-12-18T21:00:00.000Z',
-  sequence: 4,
-};
-const shares = sharesFromExercise(assigned, { id: 'shares' });
-const sold: Fill = {
-  ...shares,
-  id: 'sold',
-  kind: 'sell',
-  price: '96.55',
-  fees: '0.02',
-  tradedAt: '2026-12-21T14:30:00.000Z',
-};
-const fills = [soldPut, boughtPut, expired, assigned, shares, sold];
+const fills = assignedPutSpread();
+const [, , , assigned, , sold] = fills as [Fill, Fill, Fill, Fill, Fill, Fill]; // six by its own comment
 const deliveries = [{ optionFillId: 'assigned', sharesFillId: 'shares' }];
 
 describe('an assigned put whose premium goes into the basis of its shares', () => {

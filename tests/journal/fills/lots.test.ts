@@ -1,10 +1,9 @@
 import * as fc from 'fast-check';
 import { type Fill } from '@/journal/fills/fill';
 import { matchLots } from '@/journal/fills/lots';
-import { sharesFromExercise } from '@/journal/fills/underlying-shares';
 import { Decimal, toDecimal } from '@/journal/money/decimal';
 import { roundMoney } from '@/journal/money/rounding';
-import { fillsInOrder, option, zqxaStock } from '@/tests/journal/fills/fill-fixtures';
+import { assignedPutSpread, fillsInOrder, option, zqxaStock } from '@/tests/journal/fills/fill-fixtures';
 
 const seed = 20261201;
 const methods = ['fifo', 'lifo', 'average'] as const;
@@ -69,36 +68,8 @@ describe('matchLots on two buys and two sells of one series', () => {
 });
 
 describe('matchLots on options that end', () => {
-  const shortPut = option('put', '97');
-  const longPut = option('put', '95');
-
   it('closes an assigned put and an expired put at 0 and carries the shares at the strike: 77.34, -30.66, -45.02', () => {
-    const optionFills = fillsInOrder([
-      { kind: 'sell', instrument: shortPut, quantity: '1', price: '0.78', fees: '0.66' },
-      { kind: 'buy', instrument: longPut, quantity: '1', price: '0.30', fees: '0.66' },
-      { kind: 'expiry', instrument: longPut, quantity: '1', price: '0', fees: '0' },
-    ]);
-    const assignment: Fill = {
-      id: 'assigned',
-      kind: 'assignment',
-      instrument: shortPut,
-      quantity: '1',
-      price: '0',
-      fees: '0',
-      tradedAt: '2026-12-18T21:00:00.000Z',
-      sequence: 1,
-    };
-    const shares = sharesFromExercise(assignment, { id: 'shares' });
-    const sale: Fill = {
-      ...shares,
-      id: 'sold',
-      kind: 'sell',
-      price: '96.55',
-      fees: '0.02',
-      tradedAt: '2026-12-21T14:30:00.000Z',
-    };
-    const fills = [...optionFills, assignment, shares, sale];
-    const { closed, open, realisedProfit, cashFlow } = matchLots(fills, { method: 'fifo' });
+    const { closed, open, realisedProfit, cashFlow } = matchLots(assignedPutSpread(), { method: 'fifo' });
     expect(closed.map((lot) => [lot.closeKind, lot.direction, lot.realisedProfit])).toEqual([
       ['expiry', 'long', '-30.66'],
       ['assignment', 'short', '77.34'],

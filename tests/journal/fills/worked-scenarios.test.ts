@@ -1,3 +1,4 @@
+import { expiryPayoff, payoffAt } from '@/journal/contracts/expiry-payoff';
 import { type Fill } from '@/journal/fills/fill';
 import { matchLots } from '@/journal/fills/lots';
 import { sharesFromExercise } from '@/journal/fills/underlying-shares';
@@ -49,5 +50,28 @@ describe('three short calls pinned at the strike, two of them assigned', () => {
     const { closed, realisedProfit, open } = matchLots([...fills, shares, back], { method });
     expect(closed.map((lot) => lot.realisedProfit)).toEqual(['68.68', '34.34', '-220']);
     expect([realisedProfit, open]).toEqual(['-116.98', []]);
+  });
+});
+
+describe('an iron condor settled in cash', () => {
+  const condor = [
+    { type: 'call' as const, strikePrice: 4050, signedShares: -100 },
+    { type: 'call' as const, strikePrice: 4070, signedShares: 100 },
+    { type: 'put' as const, strikePrice: 3950, signedShares: -100 },
+    { type: 'put' as const, strikePrice: 3930, signedShares: 100 },
+  ];
+
+  it('breaks even at 3944.70 and 4055.30 before fees', () => {
+    const { breakEvens } = expiryPayoff({ legs: condor, cost: -530 });
+    expect(breakEvens).toHaveLength(2);
+    expect(breakEvens[0]).toBeCloseTo(3944.7, 9);
+    expect(breakEvens[1]).toBeCloseTo(4055.3, 9);
+  });
+
+  it('is worth -314.68 at 4058.40, at most 525.32 and at least -1,474.68 after fees, as its fills are', () => {
+    const payoff = expiryPayoff({ legs: condor, cost: -530 + 4.68 });
+    expect(payoffAt(payoff, 4058.4)).toBeCloseTo(-314.68, 9);
+    expect(payoff.greatestGain).toBeCloseTo(525.32, 9);
+    expect(payoff.greatestLoss).toBeCloseTo(-1474.68, 9);
   });
 });

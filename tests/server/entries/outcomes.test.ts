@@ -6,6 +6,7 @@ import {
   completePlan,
   expiry,
   fill,
+  indexFields,
   option,
   putBar,
 } from '@/tests/server/support/journal';
@@ -83,6 +84,27 @@ describe('an outcome', () => {
       resolvedOddsCount: outcome?.odds.length,
       session: { sessionDate: expiry, isOver: true },
     });
+  });
+
+  it('of options settled from openings waits past the last close for the settlement value', async () => {
+    const before = await app.person({ role: 'trader' });
+    const underlyingId = await addUnderlying(before, { fields: { ...indexFields, settlementTime: 'am' } });
+    const id = await addSealed(before, completePlan(underlyingId));
+    const trader = await comeBack(before, '2026-12-18T22:00:00.000Z');
+    for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+    const waitsFor = `the settlement value of ${expiry}`;
+    expect((await entryOf(trader, id)).outcome).toMatchObject({
+      isComplete: false,
+      move: null,
+      moveWaitsFor: waitsFor,
+      moveSoFar: { sessionDate: '2026-12-17', sessions: 6 },
+      odds: expect.arrayContaining([expect.objectContaining({ happened: null, waitsFor })]),
+    });
+    await putBar(trader, { underlyingId, date: expiry, close: '98', settlement: '96.5' });
+    const { outcome } = await entryOf(trader, id);
+    expect(outcome).toMatchObject({ isComplete: true, moveWaitsFor: null });
+    expect(outcome?.move).toMatchObject({ endPrice: 96.5, pricedBy: 'settlement' });
+    expect(outcome?.move?.sessions).toBeCloseTo(6.3, 9);
   });
 
   it('is computed again when a bar is corrected', async () => {

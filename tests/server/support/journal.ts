@@ -40,11 +40,16 @@ export async function addUnderlying(
 
 export const putBar = (
   person: TestPerson,
-  { underlyingId, date, close }: { underlyingId: string; date: string; close: string },
+  {
+    underlyingId,
+    date,
+    close,
+    settlement = null,
+  }: { underlyingId: string; date: string; close: string; settlement?: string | null },
 ) =>
   person
     .put(`/underlyings/${underlyingId}/bars/${date}`)
-    .send({ close, open: null, high: null, low: null, settlement: null })
+    .send({ close, open: null, high: null, low: null, settlement })
     .expect(200);
 
 /** A leg of one contract on the common expiry. */
