@@ -53,7 +53,7 @@ export function AddFillDialog({ entry, onClose }: { entry: SealedEntry; onClose:
     );
   });
   const text = (
-    name: 'quantity' | 'price' | 'fees' | 'time',
+    name: 'quantity' | 'price' | 'fees' | 'time' | 'underlyingPrice' | 'midPrice',
     label: string,
     extra: { suffix?: string; hint?: string } = {},
   ) => (
@@ -148,6 +148,17 @@ export function AddFillDialog({ entry, onClose }: { entry: SealedEntry; onClose:
           />
           {text('time', 'Time', { hint: '24 hours, such as 15:52' })}
         </Pair>
+        {kind === 'buy' || kind === 'sell' ? (
+          <View style={{ gap: 4 }}>
+            <Pair>
+              {text('underlyingPrice', `${underlying.symbol} then`)}
+              {text('midPrice', 'Mid then', { suffix: 'a share' })}
+            </Pair>
+            <Txt size="note" colour="inkSoft">
+              Both may stay empty. With them the entry can say later what the move brought and what slippage cost.
+            </Txt>
+          </View>
+        ) : null}
         {kind === 'assignment' || kind === 'exercise' ? (
           <Txt size="note" colour="inkSoft">
             {underlying.settlement === 'physical'

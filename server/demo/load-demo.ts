@@ -250,7 +250,12 @@ class DemoWriter {
     if (entryBar === undefined) return;
     const opensAt = usOptionsCalendar.sessionOn(entryBar.sessionDate)?.opensAt ?? moment.closesAt;
     for (const leg of demo.plan.legs)
-      await this.fill(entryId, moment, leg, { kind: leg.side, price: worse(leg, 0.01), at: later(opensAt, 22) });
+      await this.fill(entryId, moment, leg, {
+        kind: leg.side,
+        price: worse(leg, 0.01),
+        at: later(opensAt, 22),
+        underlyingPrice: moment.close.toFixed(2),
+      });
 
     const exitBar =
       after[
@@ -272,7 +277,12 @@ class DemoWriter {
         through: demo.expirySessionDate,
       });
       if (isExpiry && intrinsic < 0.01) {
-        await this.fill(entryId, moment, leg, { kind: 'expiry', price: '0', at: exitSession.closesAt });
+        await this.fill(entryId, moment, leg, {
+          kind: 'expiry',
+          price: '0',
+          at: exitSession.closesAt,
+          underlyingPrice: null,
+        });
         continue;
       }
       const value = isExpiry
@@ -298,6 +308,7 @@ class DemoWriter {
         kind: closing.side,
         price: worse(closing, 0.01),
         at: later(exitSession.closesAt, -4),
+        underlyingPrice: exitBar.close,
       });
     }
     if (random.next() < 0.9) {
@@ -315,7 +326,12 @@ class DemoWriter {
     entryId: string,
     { underlying }: DemoMoment,
     leg: DraftLeg,
-    { kind, price, at }: { kind: 'buy' | 'sell' | 'expiry'; price: string; at: string },
+    {
+      kind,
+      price,
+      at,
+      underlyingPrice,
+    }: { kind: 'buy' | 'sell' | 'expiry'; price: string; at: string; underlyingPrice: string | null },
   ): Promise<void> {
     const { services, scope, setTime } = this.parts;
     setTime(later(at, 3));
@@ -339,6 +355,8 @@ class DemoWriter {
         fees: kind === 'expiry' ? '0' : (0.65 * Number(leg.quantity)).toFixed(2),
         tradedAt: at,
         timeZone: 'America/New_York',
+        underlyingPrice,
+        midPrice: kind === 'expiry' ? null : leg.premium,
       },
     });
   }

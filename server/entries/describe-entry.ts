@@ -70,7 +70,7 @@ export class EntryDescriber {
               input: seal.content.input as NonNullable<Entry['sealed']>['input'],
               forecast: seal.content.forecast as NonNullable<Entry['sealed']>['forecast'],
             },
-      fills: fills.map(({ fill, timeZone, madeBy }) => ({ ...fill, timeZone, madeBy, cash: cash.get(fill.id) ?? '0' })),
+      fills: fills.map(({ fill, ...noted }) => ({ ...fill, ...noted, cash: cash.get(fill.id) ?? '0' })),
       outcome: (outcome?.outcome ?? null) as Entry['outcome'], // as above
       lesson: entry.lesson,
       isOwn: entry.traderId === scope.actor.personId,

@@ -66,5 +66,29 @@ export const fillColumns: readonly ExportColumn<ExportedFill>[] = [
     meaning: 'In the currency, all of the fill',
     of: ({ stored }) => stored.fill.fees,
   },
+  {
+    header: 'Underlying then',
+    kind: 'decimal',
+    meaning: 'Price of the underlying at the time, where it was noted',
+    of: ({ stored }) => stored.underlyingPrice,
+  },
+  {
+    header: 'Mid then',
+    kind: 'decimal',
+    meaning: 'Middle of bid and ask when it was decided, where it was noted',
+    of: ({ stored }) => stored.midPrice,
+  },
+  {
+    header: 'Underlying then',
+    kind: 'decimal',
+    meaning: 'Price of the underlying at the time, where it was noted',
+    of: ({ stored }) => stored.underlyingPrice,
+  },
+  {
+    header: 'Mid then',
+    kind: 'decimal',
+    meaning: 'Middle of bid and ask when it was decided, where it was noted',
+    of: ({ stored }) => stored.midPrice,
+  },
   { header: 'Cash', kind: 'decimal', meaning: 'In (positive) or out, after fees', of: ({ cash }) => cash },
 ];

@@ -22,6 +22,10 @@ export class FillEntity {
   @Column({ type: 'decimal', precision: 30, scale: 12 }) quantity!: string;
   @Column({ type: 'decimal', precision: 30, scale: 12 }) price!: string;
   @Column({ type: 'decimal', precision: 30, scale: 12 }) fees!: string;
+  /** Of the underlying at the time, and the middle of bid and ask; null where it was not noted. */
+  @Column({ name: 'underlying_price', type: 'decimal', precision: 30, scale: 12, nullable: true }) underlyingPrice!:
+    string | null;
+  @Column({ name: 'mid_price', type: 'decimal', precision: 30, scale: 12, nullable: true }) midPrice!: string | null;
   @Column(instantColumn('traded_at')) tradedAt!: Date;
   @Column({ name: 'time_zone', type: 'varchar', length: 64 }) timeZone!: string;
   /** Order in which fills were added, for those of one instant. */

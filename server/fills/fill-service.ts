@@ -73,6 +73,9 @@ export class FillService {
           entryId,
           tradedAt: new Date(tradedAt),
           timeZone: fill.timeZone,
+          // Shares from an exercise change hands at the strike: no price stands beside them.
+          underlyingPrice: madeBy === null ? fill.underlyingPrice : null,
+          midPrice: madeBy === null ? fill.midPrice : null,
           madeBy,
           addedAt,
         })),
@@ -155,7 +158,7 @@ export class FillService {
   private async withShares(
     scope: DeskScope,
     entry: EntryEntity,
-    { timeZone: _, ...fill }: NewFill & { sequence: number },
+    { timeZone: _, underlyingPrice: __, midPrice: ___, ...fill }: NewFill & { sequence: number },
   ) {
     const underlying = await new UnderlyingStore(scope).get(entry.underlyingId);
     const isDelivery = (fill.kind === 'exercise' || fill.kind === 'assignment') && underlying.settlement === 'physical';

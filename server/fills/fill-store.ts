@@ -6,6 +6,9 @@ import { FillEntity } from '@/server/fills/fill-entity';
 export interface StoredFill {
   readonly fill: Fill & Pick<FillEntity, 'instrument'>;
   readonly timeZone: string;
+  /** Decimal text; null where it was not noted. */
+  readonly underlyingPrice: string | null;
+  readonly midPrice: string | null;
   readonly madeBy: string | null;
 }
 
@@ -65,6 +68,8 @@ function storedFill(row: FillEntity): StoredFill {
       sequence: row.sequence,
     },
     timeZone: row.timeZone,
+    underlyingPrice: row.underlyingPrice === null ? null : plain(row.underlyingPrice),
+    midPrice: row.midPrice === null ? null : plain(row.midPrice),
     madeBy: row.madeBy,
   };
 }

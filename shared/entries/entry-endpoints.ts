@@ -138,6 +138,8 @@ export const entryEndpoints = {
       fees: decimalTextSchema,
       tradedAt: instantSchema,
       timeZone: timeZoneSchema,
+      underlyingPrice: positiveDecimalSchema.nullable().default(null),
+      midPrice: nonNegativeDecimalSchema.nullable().default(null),
     }),
     needsVersion: false,
     status: 201,

@@ -91,6 +91,9 @@ export const fillSchema = z.strictObject({
   tradedAt: instantSchema,
   /** The zone the time was typed in. */
   timeZone: z.string(),
+  /** Price of the underlying at the time, and middle of bid and ask when it was decided; null where it was not noted. */
+  underlyingPrice: positiveDecimalSchema.nullable(),
+  midPrice: nonNegativeDecimalSchema.nullable(),
   sequence: z.int(),
   /** Cash in (positive) or out, after fees; 0 for an option that ends without cash. */
   cash: decimalTextSchema,

@@ -18,6 +18,9 @@ export interface FillForm {
   /** 24 hours, HH:MM or HH:MM:SS. */
   readonly time: string;
   readonly timeZone: string;
+  /** Empty where it is not noted. */
+  readonly underlyingPrice: string;
+  readonly midPrice: string;
 }
 export type NewFill = z.output<(typeof entryEndpoints.addFill)['body']>;
 
@@ -47,6 +50,8 @@ export function newFillForm(input: ForecastInput, fills: readonly EntryFill[], n
     date: at.toPlainDate().toString(),
     time: at.toPlainTime().toString({ smallestUnit: 'minute' }),
     timeZone: EXCHANGE_ZONE,
+    underlyingPrice: '',
+    midPrice: '',
   };
 }
 
@@ -58,7 +63,11 @@ export type FillReading =
 export function readFillForm(form: FillForm, { id, input }: { id: string; input: ForecastInput }): FillReading {
   const problems: PlanProblem[] = [];
   const report = (field: string, message: string) => void problems.push({ field, message });
-  const amount = (field: 'quantity' | 'price' | 'fees', text: string, above: boolean) => {
+  const amount = (
+    field: 'quantity' | 'price' | 'fees' | 'underlyingPrice' | 'midPrice',
+    text: string,
+    above: boolean,
+  ) => {
     const value = readTypedNumber(text);
     if (value === null) report(field, 'Type a number such as 1.25.');
     else if (above && !(value > 0)) report(field, 'Must be above 0.');
@@ -68,6 +77,9 @@ export function readFillForm(form: FillForm, { id, input }: { id: string; input:
   const quantity = amount('quantity', form.quantity, true);
   const price = form.kind === 'expiry' ? '0' : amount('price', form.price, false);
   const fees = amount('fees', form.fees === '' ? '0' : form.fees, false);
+  const noted = (field: 'underlyingPrice' | 'midPrice') =>
+    form[field].trim() === '' ? null : amount(field, form[field], field === 'underlyingPrice');
+  const [underlyingPrice, midPrice] = [noted('underlyingPrice'), noted('midPrice')];
   const tradedAt = readTime(form, report);
   const leg = input.legs.find((candidate) => candidate.id === form.contract);
   if (leg === undefined && form.kind !== 'buy' && form.kind !== 'sell') {
@@ -88,7 +100,18 @@ export function readFillForm(form: FillForm, { id, input }: { id: string; input:
         };
   return {
     kind: 'complete',
-    fill: { id, kind: form.kind, instrument, quantity, price, fees, tradedAt, timeZone: form.timeZone },
+    fill: {
+      id,
+      kind: form.kind,
+      instrument,
+      quantity,
+      price,
+      fees,
+      tradedAt,
+      timeZone: form.timeZone,
+      underlyingPrice,
+      midPrice,
+    },
   };
 }
 

@@ -21,6 +21,7 @@ import { KeepAuditEventFromUpdate } from '@/server/database/migrations/0020-keep
 import { KeepAuditEventFromDelete } from '@/server/database/migrations/0021-keep-audit-event-from-delete';
 import { KeepSealedContentFromUpdate } from '@/server/database/migrations/0022-keep-sealed-content-from-update';
 import { TieSharesToTheirExercise } from '@/server/database/migrations/0023-tie-shares-to-their-exercise';
+import { NotePricesBesideFills } from '@/server/database/migrations/0024-note-prices-beside-fills';
 
 /** In the order they are applied; a new one goes to the end. */
 export const migrations = [
@@ -47,4 +48,5 @@ export const migrations = [
   KeepAuditEventFromDelete,
   KeepSealedContentFromUpdate,
   TieSharesToTheirExercise,
+  NotePricesBesideFills,
 ];

@@ -152,6 +152,8 @@ export const sampleFill = (changes: Partial<EntryFill> = {}): EntryFill => ({
   timeZone: 'America/New_York',
   sequence: 1,
   cash: '-361.95',
+  underlyingPrice: null,
+  midPrice: null,
   madeBy: null,
   ...changes,
 });

@@ -88,6 +88,8 @@ async function main(url: string): Promise<void> {
           date,
           time,
           timeZone: 'America/New_York',
+          underlyingPrice: '',
+          midPrice: '',
         },
         { id: idOf(9), input: steady },
       );
