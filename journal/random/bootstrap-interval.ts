@@ -84,7 +84,7 @@ function correctedTails<Item>(
 function jackknifeAcceleration<Item>(items: readonly Item[], valueOf: (sample: readonly Item[]) => number): number {
   const without = items.map((_, left) => valueOf(items.filter((__, at) => at !== left)));
   const mean = exactSum(without) / without.length;
-  const largest = Math.max(...without.map((value) => Math.abs(value - mean)));
+  const largest = without.reduce((most, value) => Math.max(most, Math.abs(value - mean)), 0);
   if (!(largest > 0)) return 0;
   const distances = without.map((value) => (mean - value) / largest);
   return (

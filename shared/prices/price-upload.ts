@@ -54,7 +54,7 @@ export const priceUploadSchema = z.strictObject({
   changes: z.array(z.strictObject({ row: z.int(), sessionDate: sessionDateSchema, from: z.string(), to: z.string() })),
   /** Every row that cannot be taken, with its reason and what to do; the upload is all or nothing. */
   refused: z.array(z.strictObject({ row: z.int(), text: z.string(), column: z.string(), message: z.string() })),
-  /** Returns beyond six times the usual deviation: worth a look before committing. */
+  /** Prices worth a look before committing: far moves, repeated closes, sessions without a range. */
   suspects: z.array(z.strictObject({ row: z.int(), sessionDate: sessionDateSchema, message: z.string() })),
   firstSessionDate: sessionDateSchema.nullable(),
   lastSessionDate: sessionDateSchema.nullable(),
