@@ -33,7 +33,7 @@ export interface LegForecast {
   readonly legId: string;
   /** Of the planned premium; null where no volatility reproduces it, with the reason. */
   readonly impliedDailyVolatility: number | null;
-  readonly impliedNone: 'below-intrinsic' | 'above-maximum' | 'no-time-left' | null;
+  readonly impliedNone: 'below-intrinsic' | 'no-time-value' | 'above-maximum' | 'no-time-left' | null;
   /** Model price per share under low, base, high volatility. */
   readonly modelPrice: LowBaseHigh;
   /** Per share at base volatility, unsigned by side. */

@@ -1,4 +1,5 @@
 import { structureName } from '@/journal/contracts/structure-name';
+import { checkForecastInput } from '@/journal/forecast/check-forecast-input';
 import { describeDistribution } from '@/journal/forecast/describe-distribution';
 import { engineVersion } from '@/journal/forecast/engine-version';
 import { type Forecast, type LegForecast, type PayoffEnds, type ProfitDistribution } from '@/journal/forecast/forecast';
@@ -24,11 +25,12 @@ const LATTICE_COLUMNS = 5;
  * @param calendar of the exchange the options trade on.
  * @returns plain data; the same input and engine version give the same numbers.
  * @throws {DomainError} naming what is wrong: `legs-missing`, `legs-of-several-expiries`, `expiry-not-a-session`,
- *   `expiry-in-the-past`, `holding-not-positive`, `holding-beyond-expiry`, `spot-not-positive`, `strike-not-positive`,
- *   `volatility-order`, `decimal-invalid`, `drift-invalid`, `overnight-share-out-of-range`.
+ *   `expiry-in-the-past`, `holding-not-positive`, `holding-beyond-expiry`,
+ *   `volatility-order`, `drift-invalid`, and as {@link checkForecastInput}.
  * @see the functions it composes, each with its own source.
  */
 export function makeForecast(input: ForecastInput, calendar: ExchangeCalendar): Forecast {
+  checkForecastInput(input);
   const horizon = planHorizon(input, calendar);
   const model = planModel(input, horizon);
   const { volatility, drift } = input;

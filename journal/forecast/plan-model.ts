@@ -1,14 +1,16 @@
-import { expiryPayoff, type ExpiryPayoff, type PayoffSegment } from '@/journal/contracts/expiry-payoff';
+import { expiryPayoff, type ExpiryPayoff } from '@/journal/contracts/expiry-payoff';
 import { modelPosition, type ModelPosition, openingCost, type OpeningCost } from '@/journal/contracts/position';
 import { DomainError } from '@/journal/errors/domain-error';
+import { curvedProfitLaw, type ProfitCurve } from '@/journal/forecast/curved-profit-law';
 import { type ForecastInput } from '@/journal/forecast/forecast-input';
 import { type PlanHorizon } from '@/journal/forecast/plan-horizon';
 import { profitLaw, type ProfitLaw } from '@/journal/forecast/profit-law';
+import { repricedCurve } from '@/journal/forecast/repriced-curve';
 import { type Drift, logDrift } from '@/journal/odds/log-drift';
 import { europeanOptionValue, type EuropeanOption } from '@/journal/pricing/european-option';
 import { impliedDailyVolatility, type ImpliedVolatility } from '@/journal/pricing/implied-daily-volatility';
 import { toModelNumber } from '@/journal/money/decimal';
-import { type RepricedLeg, valueAtMoment } from '@/journal/scenarios/reprice';
+import { type RepricedLeg, type RepriceMoment, valueAtMoment } from '@/journal/scenarios/reprice';
 
 /** A plan made ready for computing: exact costs, model numbers, implied volatilities. */
 export interface PlanModel {
@@ -135,12 +137,15 @@ export function lawAt(model: PlanModel, which: 'expiry' | 'exit', dailyVolatilit
   const known = laws.get(key);
   if (known !== undefined) return known;
   const { sessions } = clockOf(model, which);
-  const law = profitLaw(which === 'expiry' ? model.payoff.segments : exitSegments(model), {
+  const price = {
     spotPrice: model.spotPrice,
     logDrift: planLogDrift(model, drift, dailyVolatility, which),
     totalDeviation: dailyVolatility * Math.sqrt(sessions),
-  });
-  const made = which === 'expiry' ? law : { ...law, mean: meanAtExit(model, dailyVolatility, drift) };
+  };
+  const made =
+    which === 'expiry'
+      ? profitLaw(model.payoff.segments, price)
+      : curvedProfitLaw(exitCurve(model, meanAtExit(model, dailyVolatility, drift)), price);
   laws.set(key, made);
   return made;
 }
@@ -150,7 +155,7 @@ export function lawAt(model: PlanModel, which: 'expiry' | 'exit', dailyVolatilit
  * variance of both spans added.
  */
 function meanAtExit(model: PlanModel, dailyVolatility: number, drift: Drift): number {
-  const { horizon, input, position, spotPrice } = model;
+  const { horizon, position, spotPrice } = model;
   const heldVariance = dailyVolatility ** 2 * horizon.sessions.holding;
   const expectedSpot = spotPrice * Math.exp(planLogDrift(model, drift, dailyVolatility, 'exit') + heldVariance / 2);
   const left = horizon.sessions.toExpiry - horizon.sessions.holding;
@@ -158,59 +163,35 @@ function meanAtExit(model: PlanModel, dailyVolatility: number, drift: Drift): nu
     ...leg,
     dailyVolatility: Math.sqrt((heldVariance + leg.dailyVolatility ** 2 * left) / left),
   }));
-  const valueAt = valueAtMoment(legs, {
-    sessions: left,
-    years: Math.max(0, horizon.years.toExpiry - horizon.years.holding),
-    ratePerYear: input.ratePerYear,
-    dividendYield: input.underlying.dividendYield,
-  });
+  const valueAt = valueAtMoment(legs, exitMoment(model));
   return valueAt(expectedSpot) - position.costToOpen - position.feesToClose;
 }
 
 /**
  * Profit at the planned exit as a function of the underlying: each leg repriced at its implied volatility with what is left of
- * its life, closing fees paid; exact at the nodes, straight between.
+ * its life, closing fees paid.
  */
 export function profitAtExit(model: PlanModel): (spotPrice: number) => number {
-  const { horizon, input, position } = model;
-  const valueAt = valueAtMoment(model.repricedLegs, {
+  const { position } = model;
+  const valueAt = valueAtMoment(model.repricedLegs, exitMoment(model));
+  return (price) => valueAt(price) - position.costToOpen - position.feesToClose;
+}
+
+function exitMoment({ horizon, input }: PlanModel): RepriceMoment {
+  return {
     sessions: horizon.sessions.toExpiry - horizon.sessions.holding,
     years: Math.max(0, horizon.years.toExpiry - horizon.years.holding),
     ratePerYear: input.ratePerYear,
     dividendYield: input.underlying.dividendYield,
-  });
-  return (price) => valueAt(price) - position.costToOpen - position.feesToClose;
+  };
 }
 
-const NODES = 601;
-const REACH = 8.5;
-const segmentsByModel = new WeakMap<PlanModel, readonly PayoffSegment[]>();
-
-function exitSegments(model: PlanModel): readonly PayoffSegment[] {
-  const known = segmentsByModel.get(model);
-  if (known !== undefined) return known;
-  const profit = profitAtExit(model);
-  // Wide enough for the highest volatility in play, so that one set of nodes serves all of them.
-  const widest =
-    Math.max(model.input.volatility.high, model.impliedDailyVolatility ?? 0) *
-    Math.sqrt(model.horizon.sessions.holding);
-  const prices = Array.from(
-    { length: NODES },
-    (_, index) => model.spotPrice * Math.exp(widest * REACH * ((2 * index) / (NODES - 1) - 1)),
-  );
-  const values = prices.map(profit);
-  const segments: PayoffSegment[] = [];
-  for (let index = 0; index + 1 < NODES; index += 1) {
-    const [left = 0, right = 0] = [prices[index], prices[index + 1]];
-    const [start = 0, end = 0] = [values[index], values[index + 1]];
-    const slope = (end - start) / (right - left);
-    segments.push({
-      from: index === 0 ? 0 : left,
-      to: index + 2 === NODES ? Infinity : right,
-      intercept: start - slope * left,
-      slope,
-    });
-  }
-  segmentsByModel.set(model, segments);
-  return segments;
+function exitCurve(model: PlanModel, mean: number): ProfitCurve {
+  const { position, repricedLegs } = model;
+  const profit = repricedCurve({
+    legs: repricedLegs,
+    moment: exitMoment(model),
+    costs: position.costToOpen + position.feesToClose,
+  });
+  return { ...profit, mean };
 }

@@ -1,5 +1,5 @@
 import { type PayoffSegment } from '@/journal/contracts/expiry-payoff';
-import { normalCumulative } from '@/journal/distributions/normal-distribution';
+import { type NormalTails, probabilityBetween, tailsAt } from '@/journal/forecast/normal-tails';
 
 /** A lognormal price: ln S has mean ln(spot) + logDrift and standard deviation totalDeviation. */
 export interface LognormalPrice {
@@ -22,6 +22,18 @@ export interface ProfitLaw {
   readonly expectedShortfall: (probability: number) => number;
   /** Amounts with a probability of their own, lowest first. */
   readonly lumps: readonly { readonly profit: number; readonly probability: number }[];
+  /** Least and greatest profit over all prices, reached or approached; infinite without limit. */
+  readonly least: number;
+  readonly most: number;
+  /** Where the profit is above an amount, lowest price first; their probabilities sum to P(profit > amount). */
+  readonly rangesAbove: (amount: number) => readonly PriceRange[];
+}
+
+/** Prices of the underlying between two levels, 0 and Infinity included. */
+export interface PriceRange {
+  readonly from: number;
+  readonly to: number;
+  readonly probability: number;
 }
 
 const NEGLIGIBLE = 1e-15;
@@ -54,7 +66,42 @@ export function profitLaw(segments: readonly PayoffSegment[], price: LognormalPr
       return (worse + edge * (probability - below(edge))) / probability;
     },
     lumps: lumpsOf(weighed),
+    least: Math.min(...segments.map((segment) => Math.min(...endsOf(segment)))),
+    most: Math.max(...segments.map((segment) => Math.max(...endsOf(segment)))),
+    rangesAbove: (amount) =>
+      joinRanges(segments.flatMap((segment) => rangeAbove(segment, amount))).map((range) => ({
+        ...range,
+        probability: probabilityBetween(boundaryAt(range.from, price).count, boundaryAt(range.to, price).count),
+      })),
   };
+}
+
+/** Profit at both ends of a segment. */
+function endsOf({ from, to, intercept, slope }: PayoffSegment): readonly [number, number] {
+  return [intercept + slope * from, slope === 0 ? intercept : intercept + slope * to];
+}
+
+function rangeAbove(segment: PayoffSegment, amount: number): { from: number; to: number }[] {
+  const [start, end] = endsOf(segment);
+  if (!(Math.max(start, end) > amount)) return [];
+  const { from, to } = segment;
+  if (Math.min(start, end) > amount || segment.slope === 0) return [{ from, to }];
+  const [, low] = segment.slope > 0 ? rangeBelow(segment, amount) : [0, from];
+  const [high] = segment.slope > 0 ? [to] : rangeBelow(segment, amount);
+  return low < high ? [{ from: low, to: high }] : [];
+}
+
+/** Ranges that follow each other without a gap made one. */
+export function joinRanges(
+  ranges: readonly { readonly from: number; readonly to: number }[],
+): { readonly from: number; readonly to: number }[] {
+  const joined: { from: number; to: number }[] = [];
+  for (const { from, to } of ranges) {
+    const last = joined[joined.length - 1];
+    if (last !== undefined && from <= last.to) last.to = to;
+    else joined.push({ from, to });
+  }
+  return joined;
 }
 
 interface WeighedSegment extends PayoffSegment {
@@ -65,34 +112,15 @@ interface WeighedSegment extends PayoffSegment {
   readonly partialMean: number;
 }
 
-/** Both tails of the standard normal at one point, each with its own digits. */
-interface Tails {
-  readonly isUpper: boolean;
-  readonly below: number;
-  readonly above: number;
-}
-
 /** The tails at a price: of the price itself, and of the price as seen under its own expectation. */
 interface Boundary {
-  readonly count: Tails;
-  readonly value: Tails;
+  readonly count: NormalTails;
+  readonly value: NormalTails;
 }
 
 function boundaryAt(level: number, { spotPrice, logDrift, totalDeviation }: LognormalPrice): Boundary {
   const standard = level <= 0 ? -Infinity : (Math.log(level / spotPrice) - logDrift) / totalDeviation;
   return { count: tailsAt(standard), value: tailsAt(standard - totalDeviation) };
-}
-
-function tailsAt(standard: number): Tails {
-  const tail = normalCumulative(-Math.abs(standard));
-  return standard > 0
-    ? { isUpper: true, below: 1 - tail, above: tail }
-    : { isUpper: false, below: tail, above: 1 - tail };
-}
-
-/** Probability between two boundaries, from the nearer tail, so that a small one keeps its digits. */
-function between(low: Tails, high: Tails): number {
-  return low.isUpper ? low.above - high.above : high.below - low.below;
 }
 
 function forwardOf({ spotPrice, logDrift, totalDeviation }: LognormalPrice): number {
@@ -106,9 +134,8 @@ function weigh(segments: readonly PayoffSegment[], price: LognormalPrice): Weigh
   for (const segment of segments) {
     const { from, to, intercept, slope } = segment;
     const high = boundaryAt(to, price);
-    const probability = between(low.count, high.count);
-    const start = intercept + slope * from;
-    const end = slope === 0 ? intercept : intercept + slope * to;
+    const probability = probabilityBetween(low.count, high.count);
+    const [start, end] = endsOf(segment);
     if (probability > NEGLIGIBLE) {
       weighed.push({
         from,
@@ -118,7 +145,7 @@ function weigh(segments: readonly PayoffSegment[], price: LognormalPrice): Weigh
         least: Math.min(start, end),
         most: Math.max(start, end),
         probability,
-        partialMean: intercept * probability + slope * forward * between(low.value, high.value),
+        partialMean: intercept * probability + slope * forward * probabilityBetween(low.value, high.value),
       });
     }
     low = high;
@@ -136,7 +163,7 @@ function shareBelow(segment: WeighedSegment, amount: number, price: LognormalPri
   if (segment.most < amount || (includesAmount && segment.most === amount)) return segment.probability;
   if (segment.least >= amount || segment.slope === 0) return 0;
   const [from, to] = rangeBelow(segment, amount);
-  return between(boundaryAt(from, price).count, boundaryAt(to, price).count);
+  return probabilityBetween(boundaryAt(from, price).count, boundaryAt(to, price).count);
 }
 
 function partialMeanBelow(segment: WeighedSegment, amount: number, price: LognormalPrice): number {
@@ -145,8 +172,8 @@ function partialMeanBelow(segment: WeighedSegment, amount: number, price: Lognor
   const [from, to] = rangeBelow(segment, amount);
   const [low, high] = [boundaryAt(from, price), boundaryAt(to, price)];
   return (
-    segment.intercept * between(low.count, high.count) +
-    segment.slope * forwardOf(price) * between(low.value, high.value)
+    segment.intercept * probabilityBetween(low.count, high.count) +
+    segment.slope * forwardOf(price) * probabilityBetween(low.value, high.value)
   );
 }
 

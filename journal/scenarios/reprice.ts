@@ -7,13 +7,16 @@ export interface RepricedLeg {
   readonly signedShares: number;
   /** Fraction per session. */
   readonly dailyVolatility: number;
+  /** Sessions and calendar years of its life beyond the first expiry of the position, 0 when left out. */
+  readonly sessionsBeyond?: number;
+  readonly yearsBeyond?: number;
 }
 
 /** What is the same for every price of the underlying at one moment. */
 export interface RepriceMoment {
-  /** Sessions of variance left, 0 or more. */
+  /** Sessions of variance left to the first expiry, 0 or more. */
   readonly sessions: number;
-  /** Calendar years left, 0 or more. */
+  /** Calendar years left to the first expiry, 0 or more. */
   readonly years: number;
   readonly ratePerYear: number;
   readonly dividendYield: number;
@@ -22,23 +25,29 @@ export interface RepriceMoment {
 /**
  * The value of a set of options as a function of the spot price, at one moment: what does not depend on the spot is worked
  * out once, since lattices and exit distributions ask for hundreds of prices.
- * @returns currency, positive when the options are worth something to their owner.
+ * @param shares of the underlying held beside the options, negative when short.
+ * @returns currency, positive when the position is worth something to its owner.
  * @see Black and Scholes (1973), Merton (1973), repriced in full.
  */
-export function valueAtMoment(legs: readonly RepricedLeg[], moment: RepriceMoment): (spotPrice: number) => number {
-  const carry = Math.exp(-moment.dividendYield * moment.years);
-  const discount = Math.exp(-moment.ratePerYear * moment.years);
-  const rootSessions = Math.sqrt(moment.sessions);
-  const prepared = legs.map(({ type, strikePrice, signedShares, dailyVolatility }) => ({
-    direction: type === 'call' ? 1 : -1,
-    presentStrike: strikePrice * discount,
-    totalDeviation: dailyVolatility * rootSessions,
-    signedShares,
-  }));
+export function valueAtMoment(
+  legs: readonly RepricedLeg[],
+  moment: RepriceMoment,
+  shares = 0,
+): (spotPrice: number) => number {
+  const prepared = legs.map((leg) => {
+    const years = moment.years + (leg.yearsBeyond ?? 0);
+    return {
+      direction: leg.type === 'call' ? 1 : -1,
+      carry: Math.exp(-moment.dividendYield * years),
+      presentStrike: leg.strikePrice * Math.exp(-moment.ratePerYear * years),
+      totalDeviation: leg.dailyVolatility * Math.sqrt(moment.sessions + (leg.sessionsBeyond ?? 0)),
+      signedShares: leg.signedShares,
+    };
+  });
   return (spotPrice) => {
-    const presentSpot = spotPrice * carry;
-    let value = 0;
+    let value = shares * spotPrice;
     for (const leg of prepared) {
+      const presentSpot = spotPrice * leg.carry;
       const intrinsic = leg.direction * (presentSpot - leg.presentStrike);
       const timeValue = outOfTheMoneyPrice(presentSpot, leg.presentStrike, leg.totalDeviation);
       value += leg.signedShares * (intrinsic > 0 ? intrinsic + timeValue : timeValue);

@@ -27,6 +27,11 @@ export function planProblemOf({ code, details }: DomainError): PlanProblem {
         field: 'volatility.source',
         message: 'The volatility must be above 0. With closes that never change there is nothing to price: type it.',
       };
+    case 'target-and-stop-on-one-side':
+      return {
+        field: 'stopPrice',
+        message: 'Target and stop lie on one side of the price. Put one above it and one below, or leave one empty.',
+      };
     case 'strike-not-positive':
       return { field: `legs.${leg}.strikePrice`, message: `Leg ${leg + 1}: the strike must be above 0.` };
     default:

@@ -212,6 +212,33 @@ describe('makeForecast refuses', () => {
       { ...longCall, legs: longCall.legs.map((leg) => ({ ...leg, premium: '1,20' })) },
       'decimal-invalid',
     ],
+    ...[0, 1.5, -1, NaN, Infinity].map((quantity): readonly [string, ForecastInput, string] => [
+      `a quantity of ${quantity}`,
+      { ...longCall, legs: longCall.legs.map((leg) => ({ ...leg, quantity })) },
+      'leg-quantity-invalid',
+    ]),
+    [
+      'a premium below 0',
+      { ...longCall, legs: longCall.legs.map((leg) => ({ ...leg, premium: '-0.01' })) },
+      'leg-premium-negative',
+    ],
+    ['a fee below 0', { ...longCall, feePerContract: '-0.65' }, 'fee-negative'],
+    [
+      'a multiplier of 0',
+      { ...longCall, underlying: { ...longCall.underlying, multiplier: '0' } },
+      'multiplier-not-positive',
+    ],
+    ['legs of one id', { ...longCall, legs: [...longCall.legs, ...longCall.legs] }, 'leg-id-repeated'],
+    ['a spot of 0', { ...longCall, spot: { ...longCall.spot, price: '0' } }, 'spot-not-positive'],
+    ['a rate that is no number', { ...longCall, ratePerYear: NaN }, 'rate-not-finite'],
+    ['an overnight share above 1', { ...longCall, overnightShare: 1.01 }, 'overnight-share-out-of-range'],
+    ['a target of 0', { ...longCall, targetPrice: '0' }, 'level-not-positive'],
+    ['a stop at the price', { ...longCall, stopPrice: '100.00' }, 'level-at-spot'],
+    [
+      'target and stop on one side',
+      { ...longCall, targetPrice: '104', stopPrice: '102' },
+      'target-and-stop-on-one-side',
+    ],
   ];
   it.each(refusals)('%s', (_, input, code) => {
     expect(() => forecastOf(input)).toThrow(DomainError);
