@@ -1,3 +1,4 @@
+import { defaultOvernightShare } from '@/journal/volatility/overnight-share';
 import { emailKeyOf, type PeopleStore } from '@/server/people/people-store';
 import { passwordWeakness } from '@/server/account/common-passwords';
 import { InvitationEntity } from '@/server/account/invitation-entity';
@@ -115,7 +116,7 @@ export class AccountService {
             name: deskName,
             currency: 'USD',
             ratePerYear: 0.04,
-            overnightShare: 0.3,
+            overnightShare: defaultOvernightShare,
             feePerContract: '0.65',
             createdAt: now,
           },

@@ -10,6 +10,7 @@ import {
 import { addDays } from '@/journal/sessions/session-date';
 import { latestCloseAt } from '@/journal/sessions/session-clock';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
+import { defaultOvernightShare } from '@/journal/volatility/overnight-share';
 import { type DeskScope } from '@/server/database/desk-scope';
 import { demoDesk, demoLessons, demoPeople, type DemoUnderlying, demoUnderlyings } from '@/server/demo/demo-scenario';
 import { type DemoMoment, type DemoPlan, planDemoEntry, premiumOf } from '@/server/demo/plan-demo-entry';
@@ -89,7 +90,7 @@ async function makePeople(
     name: demoDesk.name,
     currency: demoDesk.currency,
     ratePerYear: 0.04,
-    overnightShare: 0.3,
+    overnightShare: defaultOvernightShare,
     feePerContract: '0.65',
     version: 1,
   };

@@ -4,12 +4,13 @@ import { countSessions } from '@/journal/sessions/exchange-calendar';
 import { sessionsBetween } from '@/journal/sessions/session-clock';
 import { isSessionDate } from '@/journal/sessions/session-date';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
+import { defaultOvernightShare } from '@/journal/volatility/overnight-share';
 import { engineCommand } from '@/server/engine/commands/engine-command';
 
 const sessionsCaseSchema = z.strictObject({
   from: z.string(),
   to: z.string(),
-  overnightShare: z.number().default(0.3),
+  overnightShare: z.number().default(defaultOvernightShare),
 });
 
 /** Sessions after one date through another, or the session clock between two instants. */
