@@ -1,6 +1,9 @@
 import { type Fill } from '@/journal/fills/fill';
 import { type Forecast, type StatedOdds } from '@/journal/forecast/forecast';
 import { type ForecastInput } from '@/journal/forecast/forecast-input';
+import { type EntryProcess } from '@/journal/outcome/entry-process';
+import { type FillMarks } from '@/journal/outcome/market-at';
+import { type ProfitSources } from '@/journal/outcome/profit-sources';
 
 /** One session's prices as far as the outcome needs them; open, high and low only where the bar has them. */
 export interface OutcomeBar {
@@ -20,6 +23,10 @@ export interface OutcomeQuestion {
   readonly fills: readonly Fill[];
   /** Bars of sessions that close after the moment of the spot price, oldest first. */
   readonly barsSince: readonly OutcomeBar[];
+  /** Prices noted with fills, by the fill's id. */
+  readonly marks: ReadonlyMap<string, FillMarks>;
+  /** Instant of the seal. */
+  readonly sealedAt: string;
 }
 
 export interface ResolvedOdds {
@@ -93,6 +100,10 @@ export interface EntryOutcome {
     readonly horizon: 'expiry' | 'exit';
     readonly expectedMean: number;
   } | null;
+  /** Where the realised profit came from; null while the position is open, or a price of the underlying is not there. */
+  readonly sources: ProfitSources | null;
+  /** How the plan was carried out; null without fills. */
+  readonly process: EntryProcess | null;
   /** True once the options' expiry is settled and no answer is waited for. */
   readonly isComplete: boolean;
 }

@@ -14,9 +14,11 @@ import {
   type OutcomeQuestion,
   type ResolvedOdds,
 } from '@/journal/outcome/entry-outcome';
+import { entryProcess } from '@/journal/outcome/entry-process';
 import { plannedEnd, reachedEnd } from '@/journal/outcome/hold-end';
 import { type ObservedPrice, pricePath } from '@/journal/outcome/price-path';
 import { profitPercentile } from '@/journal/outcome/profit-percentile';
+import { profitSources } from '@/journal/outcome/profit-sources';
 import { realisedMove } from '@/journal/outcome/realised-move';
 import { realisedVolatility, volatilityRatioRange } from '@/journal/outcome/realised-volatility';
 import { answerOdds } from '@/journal/outcome/resolve-odds';
@@ -66,6 +68,8 @@ export function resolveEntry(question: OutcomeQuestion, calendar: ExchangeCalend
     realisedVolatility: volatilityOver(model, path.observed, calendar),
     odds,
     profit,
+    sources: isFinal ? profitSources({ ...question, calendar }) : null,
+    process: entryProcess({ ...question, calendar }),
     isComplete: odds.every(({ waitsFor }) => waitsFor === null) && (fills.length === 0 || isFinal),
   };
 }

@@ -5,7 +5,7 @@ import { type EntryEntity } from '@/server/entries/entry-entity';
 import { FillStore } from '@/server/fills/fill-store';
 import { OutcomeEntity } from '@/server/outcomes/outcome-entity';
 import { namesOnDesk } from '@/server/people/people-names';
-import { SealStore } from '@/server/seals/seal-store';
+import { sealedAtOf, SealStore } from '@/server/seals/seal-store';
 import { UnderlyingStore } from '@/server/underlyings/underlying-store';
 import { type Entry, type EntryRow } from '@/shared/entries/entry';
 
@@ -60,7 +60,7 @@ export class EntryDescriber {
               receipt: {
                 forecastId: seal.link.id,
                 sequence: seal.link.sequence,
-                sealedAt: new Date(Number(BigInt(seal.link.sealedAtMicroseconds) / 1000n)).toISOString(),
+                sealedAt: sealedAtOf(seal.link),
                 hash: seal.link.hash,
                 previousHash: seal.link.previousHash,
                 engineVersion: seal.link.engineVersion,

@@ -11,7 +11,7 @@ import { ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
 import { BarStore } from '@/server/prices/bar-store';
 import { type Clock } from '@/server/runtime/clock';
 import { type Ids } from '@/server/runtime/ids';
-import { SealStore, type StoredSeal } from '@/server/seals/seal-store';
+import { sealedAtOf, SealStore, type StoredSeal } from '@/server/seals/seal-store';
 import { type Bar } from '@/shared/underlyings/underlying';
 import { oddsStatement } from '@/shared/entries/odds-statement';
 
@@ -48,11 +48,18 @@ export class OutcomeService {
     const seal = await new SealStore(scope).findByEntry(entry.id);
     if (seal === null) return;
     const { input, forecast } = seal.content;
-    const fills = (await new FillStore(scope).list(entry.id)).map(({ fill }) => fill);
+    const stored = await new FillStore(scope).list(entry.id);
+    const fills = stored.map(({ fill }) => fill);
+    const marks = new Map(
+      stored.map(({ fill, underlyingPrice, midPrice }) => [fill.id, { underlyingPrice, midPrice }]),
+    );
     const barsSince = bars
       .filter((bar) => (usOptionsCalendar.sessionOn(bar.sessionDate)?.closesAt ?? '') > input.spot.at)
       .map(outcomeBar);
-    const outcome = resolveEntry({ input, forecast, fills, barsSince }, usOptionsCalendar);
+    const outcome = resolveEntry(
+      { input, forecast, fills, barsSince, marks, sealedAt: sealedAtOf(seal.link) },
+      usOptionsCalendar,
+    );
     await this.store(scope, entry, seal, outcome);
     const landed = outcome.move?.inSigmas ?? null;
     const now = outcome.moveSoFar?.inSigmas ?? null;

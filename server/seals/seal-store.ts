@@ -16,6 +16,10 @@ export interface NewSeal {
   readonly engineVersion: string;
 }
 
+/** The instant of a seal, from its microseconds. */
+export const sealedAtOf = ({ sealedAtMicroseconds }: Pick<SealedForecastEntity, 'sealedAtMicroseconds'>): string =>
+  new Date(Number(BigInt(sealedAtMicroseconds) / 1000n)).toISOString();
+
 export interface StoredSeal {
   readonly link: SealedForecastEntity;
   readonly content: Omit<SealedPayload, 'closes'>;

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { CANNOT_TELL } from '@/journal/outcome/entry-outcome';
-import { decimalTextSchema, sessionDateSchema } from '@/shared/contract/fields';
+import { decimalTextSchema, idSchema, sessionDateSchema } from '@/shared/contract/fields';
 import { statedOddsSchema } from '@/shared/entries/forecast-schema';
 
 const number = z.number();
@@ -56,5 +56,47 @@ export const entryOutcomeSchema = z.strictObject({
       expectedMean: number,
     })
     .nullable(),
+  sources: z
+    .strictObject({
+      move: decimalTextSchema,
+      time: decimalTextSchema,
+      volatility: decimalTextSchema,
+      carry: decimalTextSchema,
+      markResidual: decimalTextSchema,
+      slippage: decimalTextSchema,
+      fees: decimalTextSchema,
+      realisedProfit: decimalTextSchema,
+      underlyingFrom: z.enum(['noted', 'close']),
+      isSlippageKnown: z.boolean(),
+    })
+    .nullable()
+    .default(null),
+  process: z
+    .strictObject({
+      isSealedBeforeFill: z.boolean(),
+      size: z.strictObject({
+        isWithin: z.boolean(),
+        legs: z.array(
+          z.strictObject({
+            legId: idSchema.nullable(),
+            planned: decimalTextSchema,
+            greatest: decimalTextSchema,
+            isWithin: z.boolean(),
+          }),
+        ),
+      }),
+      limit: z
+        .strictObject({
+          netPremium: decimalTextSchema,
+          limit: decimalTextSchema,
+          beyond: decimalTextSchema,
+          isWithin: z.boolean(),
+        })
+        .nullable(),
+      exitTag: z.enum(['target', 'stop', 'time', 'event', 'expiry', 'unplanned']).nullable(),
+      isFollowed: z.boolean().nullable(),
+    })
+    .nullable()
+    .default(null),
   isComplete: z.boolean(),
 });

@@ -4,7 +4,7 @@ import { CANNOT_TELL, type EntryOutcome, type OutcomeBar } from '@/journal/outco
 import { resolveEntry } from '@/journal/outcome/resolve-entry';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
 import { longCall } from '@/tests/journal/forecast/plan-examples';
-import { outcomeBar } from '@/tests/journal/outcome/outcome-bars';
+import { nothingNoted, outcomeBar } from '@/tests/journal/outcome/outcome-bars';
 
 // From the close of Wed 9 Dec: two sessions, the night, and 0.35 of the third session's 0.70: Mon 14 Dec at 12:45 in New York.
 const input: ForecastInput = {
@@ -21,7 +21,7 @@ const exitDay = (rest: Partial<OutcomeBar> = {}) =>
   outcomeBar('2026-12-14', 101.2, { open: 101.1, high: 101.9, low: 100.4, ...rest });
 const resolve = (bars: OutcomeBar[], plan: ForecastInput = input) =>
   resolveEntry(
-    { input: plan, forecast: makeForecast(plan, usOptionsCalendar), barsSince: bars, fills: [] },
+    { input: plan, forecast: makeForecast(plan, usOptionsCalendar), barsSince: bars, fills: [], ...nothingNoted(plan) },
     usOptionsCalendar,
   );
 const answerTo = ({ odds }: EntryOutcome, kind: string) => {

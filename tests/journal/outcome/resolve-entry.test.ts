@@ -6,10 +6,13 @@ import { resolveEntry } from '@/journal/outcome/resolve-entry';
 import { volatilityRatioRange } from '@/journal/outcome/realised-volatility';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
 import { closeOf, longCall } from '@/tests/journal/forecast/plan-examples';
-import { outcomeBar as bar } from '@/tests/journal/outcome/outcome-bars';
+import { nothingNoted, outcomeBar as bar } from '@/tests/journal/outcome/outcome-bars';
 
 const resolve = (input: ForecastInput, barsSince: OutcomeBar[], fills: Fill[] = []) =>
-  resolveEntry({ input, forecast: makeForecast(input, usOptionsCalendar), barsSince, fills }, usOptionsCalendar);
+  resolveEntry(
+    { input, forecast: makeForecast(input, usOptionsCalendar), barsSince, fills, ...nothingNoted(input) },
+    usOptionsCalendar,
+  );
 
 function fillOf(
   input: ForecastInput,

@@ -4,7 +4,7 @@ import { type EntryOutcome, type OutcomeBar } from '@/journal/outcome/entry-outc
 import { resolveEntry } from '@/journal/outcome/resolve-entry';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
 import { longCall } from '@/tests/journal/forecast/plan-examples';
-import { outcomeBar } from '@/tests/journal/outcome/outcome-bars';
+import { nothingNoted, outcomeBar } from '@/tests/journal/outcome/outcome-bars';
 
 const input: ForecastInput = {
   ...longCall,
@@ -30,7 +30,7 @@ const lastDay = (rest: Partial<OutcomeBar> = {}) =>
   outcomeBar('2026-12-23', 106, { open: 101.5, high: 107, low: 96, ...rest });
 const resolve = (bars: OutcomeBar[]) =>
   resolveEntry(
-    { input, forecast: makeForecast(input, usOptionsCalendar), barsSince: bars, fills: [] },
+    { input, forecast: makeForecast(input, usOptionsCalendar), barsSince: bars, fills: [], ...nothingNoted(input) },
     usOptionsCalendar,
   );
 const answers = ({ odds }: EntryOutcome) =>
