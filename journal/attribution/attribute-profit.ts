@@ -49,7 +49,8 @@ const MODEL_PLACES = 12;
  * middle prices did beyond it; what was lost between them and the fills; fees. Legs are attributed one by one and added. Rounded
  * to cents by largest remainder, legs first, so that parts, legs and totals all add up.
  * @param legs at least one, all in one currency.
- * @throws {DomainError} `legs-missing`, and as legPrice, signedShares, legVolatilities and averagedEffects.
+ * @throws {DomainError} `legs-missing`; as legPrice, signedShares, legVolatilities and averagedEffects; and as largestRemainder for
+ *   amounts beyond 1e26, whose cents 40 digits do not hold.
  * @see averagedEffects for the orders; Perold (1988), J. Portfolio Management 14(3), 4-9, for slippage against the middle price at
  *   the decision (implementation shortfall).
  */

@@ -5,7 +5,7 @@ import { type CarriedLot, type LotBook } from '@/journal/fills/lot-book';
 import { AVERAGE_PLACES, averagePrice } from '@/journal/fills/lot-value';
 import { type SignedFill } from '@/journal/fills/signed-fill';
 import { dealPart, startAmountSplit, undealtAmount } from '@/journal/money/amount-split';
-import { Decimal, toDecimalText } from '@/journal/money/decimal';
+import { type Decimal, toDecimalText } from '@/journal/money/decimal';
 import { roundMoney } from '@/journal/money/rounding';
 
 interface Pool {
@@ -30,7 +30,7 @@ export class LotPool implements LotBook {
       this.open(signed, { direction, quantity, fees: signed.fees });
       return [];
     }
-    const closedQuantity = Decimal.min(quantity, this.pool.quantity);
+    const closedQuantity = quantity.lessThan(this.pool.quantity) ? quantity : this.pool.quantity;
     const closeFees = dealPart(startAmountSplit({ amount: signed.fees, quantity }), closedQuantity);
     const closed = this.close({ pool: this.pool, signed, quantity: closedQuantity, closeFees: closeFees.part });
     const left = quantity.minus(closedQuantity);

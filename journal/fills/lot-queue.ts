@@ -5,7 +5,7 @@ import { type CarriedLot, type LotBook } from '@/journal/fills/lot-book';
 import { AVERAGE_PLACES, averagePrice } from '@/journal/fills/lot-value';
 import { type SignedFill } from '@/journal/fills/signed-fill';
 import { type AmountSplit, dealPart, startAmountSplit, undealtAmount } from '@/journal/money/amount-split';
-import { Decimal, toDecimalText } from '@/journal/money/decimal';
+import { type Decimal, toDecimalText } from '@/journal/money/decimal';
 
 interface QueuedLot {
   readonly instrument: Instrument;
@@ -36,7 +36,7 @@ export class LotQueue implements LotBook {
     while (left.greaterThan(0)) {
       const lot = this.next();
       if (lot === undefined || lot.direction === direction) break;
-      const quantity = Decimal.min(left, lot.quantity);
+      const quantity = left.lessThan(lot.quantity) ? left : lot.quantity;
       const opened = dealPart(lot.fees, quantity);
       const ended = dealPart(closeFees, quantity);
       closed.push(

@@ -49,7 +49,7 @@ export function signFills(fills: readonly Fill[], changes: readonly InstrumentCh
 
 /**
  * As signFills, with the changes of what is held between the fills.
- * @throws {DomainError} `decimal-invalid`; `quantity-not-positive`, `price-negative`, `multiplier-invalid`, `trade-time-invalid`
+ * @throws {DomainError} `decimal-invalid`; `strike-not-positive`; `quantity-not-positive`, `price-negative`, `multiplier-invalid`, `trade-time-invalid`
  *   and `sequence-invalid` with the fill's id; `fill-repeated` for two fills or changes of one id; `multipliers-mixed` within one
  *   series; `settlement-of-stock`; `settlement-exceeds-position` when more ends than is open; `settlement-side-wrong` for the
  *   assignment of a long or the exercise of a short option; `change-meets-opposite-position` when long would become short of the

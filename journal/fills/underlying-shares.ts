@@ -17,7 +17,7 @@ export interface SharesFromExercise {
  * the delivery is taken off. Where that price does not end, the rest of its rounding (below 1e-9) stands in the fees, so that no
  * money is lost.
  * @param fill an option's 'exercise' or 'assignment'.
- * @throws {DomainError} `no-delivery` for any other fill, `quantity-not-positive`, `decimal-invalid`, `delivery-cash-invalid` when
+ * @throws {DomainError} `no-delivery` for any other fill, `quantity-not-positive`, `sequence-invalid`, `decimal-invalid`, `delivery-cash-invalid` when
  *   the cash is negative or more than the strike pays for.
  * @see The Characteristics and Risks of Standardized Options (exercise and settlement; adjustments); from memory.
  */
@@ -26,6 +26,7 @@ export function sharesFromExercise(fill: Fill, { id, fees = '0' }: SharesFromExe
   if (instrument.kind !== 'option' || (kind !== 'exercise' && kind !== 'assignment')) {
     throw new DomainError('no-delivery', { fillId: fill.id, kind, instrument: instrument.kind });
   }
+  if (!Number.isFinite(fill.sequence)) throw new DomainError('sequence-invalid', { fillId: fill.id });
   const { deliverable } = instrument;
   const contracts = toDecimal(fill.quantity);
   const shares = contracts.times(toDecimal(deliverable?.sharesPerContract ?? instrument.multiplier));
@@ -43,7 +44,7 @@ export function sharesFromExercise(fill: Fill, { id, fees = '0' }: SharesFromExe
     kind: isBuy ? 'buy' : 'sell',
     instrument: { kind: 'stock', symbol: deliverable?.symbol ?? instrument.underlyingSymbol, multiplier: '1' },
     quantity: toDecimalText(shares),
-    price: deliverable === undefined ? instrument.strikePrice : toDecimalText(price),
+    price: toDecimalText(price),
     fees: toDecimalText(isBuy ? toDecimal(fees).plus(rest) : toDecimal(fees).minus(rest)),
     tradedAt: fill.tradedAt,
     sequence: fill.sequence,

@@ -16,6 +16,8 @@ export interface AmountSplit {
   readonly places: number;
 }
 
+const nothing = new Decimal(0);
+
 /**
  * @param amount any sign (a rebate is negative), currency.
  * @param quantity above 0.
@@ -32,7 +34,7 @@ export function startAmountSplit({
   places?: number;
 }): AmountSplit {
   if (!quantity.greaterThan(0)) throw new DomainError('quantity-not-positive', { quantity: quantity.toString() });
-  return { amount, quantity, dealtQuantity: new Decimal(0), givenAmount: new Decimal(0), places };
+  return { amount, quantity, dealtQuantity: nothing, givenAmount: nothing, places };
 }
 
 /**
@@ -45,15 +47,15 @@ export function dealPart(split: AmountSplit, partQuantity: Decimal): { part: Dec
   if (!partQuantity.greaterThan(0))
     throw new DomainError('quantity-not-positive', { quantity: partQuantity.toString() });
   const dealtQuantity = split.dealtQuantity.plus(partQuantity);
-  if (dealtQuantity.greaterThan(split.quantity)) {
+  const left = split.quantity.comparedTo(dealtQuantity);
+  if (left < 0) {
     throw new DomainError('part-exceeds-quantity', {
       quantity: split.quantity.toString(),
       dealt: dealtQuantity.toString(),
     });
   }
-  const givenAmount = dealtQuantity.equals(split.quantity)
-    ? split.amount
-    : roundMoney(split.amount.times(dealtQuantity).dividedBy(split.quantity), split.places);
+  const givenAmount =
+    left === 0 ? split.amount : roundMoney(split.amount.times(dealtQuantity).dividedBy(split.quantity), split.places);
   return { part: givenAmount.minus(split.givenAmount), split: { ...split, dealtQuantity, givenAmount } };
 }
 

@@ -28,7 +28,8 @@ const greatestDigitCount = 40;
  */
 export function toDecimal(text: DecimalText): Decimal {
   const isPlain = typeof text === 'string' && text.length <= greatestDigitCount + 2 && /^-?\d+(\.\d+)?$/.test(text);
-  const isShort = isPlain && text.replace(/[-.]/g, '').length <= greatestDigitCount;
+  const isShort =
+    isPlain && (text.length <= greatestDigitCount || text.replace(/[-.]/g, '').length <= greatestDigitCount);
   if (!isShort) throw new DomainError('decimal-invalid', { text: String(text).slice(0, 60) });
   return withoutNegativeZero(new Decimal(text));
 }

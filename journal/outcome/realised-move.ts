@@ -13,7 +13,7 @@ export interface RealisedMoveQuestion {
   readonly sessions: number;
   /** The forecast's mean of the log price change over the hold. */
   readonly logDrift: number;
-  /** Of the estimate of the volatility (returns less one where a mean was taken off), above 0; null when it is not an estimate. */
+  /** Of the estimate of the volatility (returns less one where a mean was taken off), from 0.1 to 1e6; null when it is not an estimate. */
   readonly degreesOfFreedom?: number | null;
 }
 
@@ -28,6 +28,10 @@ export interface RealisedMove {
   readonly studentPercentile: number | null;
 }
 
+/** With more, Student's distribution is the normal one to every digit shown. */
+const MOST_DEGREES = 1e6;
+const LEAST_DEGREES = 0.1;
+
 /**
  * Sets the move that came against the one that was forecast.
  * @throws {DomainError} `realised-move-invalid` with the inputs, `degrees-of-freedom-invalid`.
@@ -38,9 +42,15 @@ export function realisedMove(question: RealisedMoveQuestion): RealisedMove {
   const { startPrice, endPrice, dailyVolatility, sessions, logDrift, degreesOfFreedom = null } = question;
   const arePositive = [startPrice, endPrice, dailyVolatility, sessions].every((value) => value > 0 && value < Infinity);
   if (!(arePositive && Number.isFinite(logDrift))) throw new DomainError('realised-move-invalid', { ...question });
+  const hasDegrees =
+    degreesOfFreedom === null || (degreesOfFreedom >= LEAST_DEGREES && degreesOfFreedom <= MOST_DEGREES);
+  if (!hasDegrees) throw new DomainError('degrees-of-freedom-invalid', { degreesOfFreedom });
   const totalDeviation = dailyVolatility * Math.sqrt(sessions);
   const logReturn = Math.log(endPrice / startPrice);
   const deviations = (logReturn - logDrift) / totalDeviation;
+  // Prices or a volatility so extreme that their quotient leaves the range of a double.
+  if (!(Number.isFinite(logReturn / totalDeviation) && Number.isFinite(deviations)))
+    throw new DomainError('realised-move-invalid', { ...question });
   return {
     logReturn,
     inSigmas: logReturn / totalDeviation,

@@ -26,23 +26,26 @@ export interface RealisedVolatility {
  * Volatility that came over the hold: sqrt(sum of squared log returns / sum of sessions), with the mean taken as 0.
  * @param returns at least one. @param confidence above 0 and below 1; 0.95 by default.
  * @throws {DomainError} `returns-missing`, `return-invalid` with the index, `confidence-out-of-range`,
- *   `volatility-invalid` when the squares are beyond every double.
+ *   `returns-overflow` when their sums leave the range of a double.
  * @see Common practice: over a short hold the mean is too poorly known to be taken off. The interval is that of chi-square, with
  *   (sum of weights)² / (sum of squared weights) degrees of freedom: Satterthwaite (1946), Biometrics Bulletin 2(6), 110-114; normal
  *   independent returns, and fat tails widen it.
  */
 export function realisedVolatility(returns: readonly WeightedReturn[], confidence = 0.95): RealisedVolatility {
   if (returns.length === 0) throw new DomainError('returns-missing');
-  let [squares, total, squaredWeights] = [0, 0, 0];
+  let [squares, total, greatest] = [0, 0, 0];
   for (const [index, { logReturn, sessions }] of returns.entries()) {
     const isValid = Number.isFinite(logReturn) && sessions > 0 && sessions < Infinity;
     if (!isValid) throw new DomainError('return-invalid', { index, logReturn, sessions });
     squares += logReturn ** 2;
     total += sessions;
-    squaredWeights += sessions ** 2;
+    greatest = Math.max(greatest, sessions);
   }
   const dailyVolatility = Math.sqrt(squares / total);
-  const degreesOfFreedom = total ** 2 / squaredWeights;
+  const squaredShares = returns.reduce((sum, { sessions }) => sum + (sessions / greatest) ** 2, 0);
+  const degreesOfFreedom = (total / greatest) ** 2 / squaredShares;
+  if (!(Number.isFinite(dailyVolatility) && Number.isFinite(degreesOfFreedom)))
+    throw new DomainError('returns-overflow');
   const interval = volatilityInterval({ dailyVolatility, degreesOfFreedom, confidence });
   return { dailyVolatility, sessions: total, degreesOfFreedom, ...interval, confidence };
 }
@@ -50,7 +53,7 @@ export function realisedVolatility(returns: readonly WeightedReturn[], confidenc
 /**
  * The range in which realised volatility / estimated volatility falls by chance alone when the true volatility never changed:
  * both are estimates, and their squared ratio follows the F distribution.
- * @param returnsRealised full returns of the hold, above 0; fractions allowed. @param degreesOfFreedom of the estimate (returns less one), above 0.
+ * @param returnsRealised full returns of the hold, from 0.1; fractions allowed. @param degreesOfFreedom of the estimate (returns less one), from 0.1.
  * @param confidence above 0 and below 1; 0.95 by default.
  * @throws {DomainError} `confidence-invalid`, `variance-ratio-invalid`.
  * @see The F ratio of two normal sample variances, any statistics text. Independent normal returns: fat tails widen it.

@@ -4,7 +4,8 @@ import { DomainError } from '@/journal/errors/domain-error';
  * Quantile of the ratio of two independent estimates of one variance from normal returns (the F distribution). Worked out here to
  * the last digits, since jstat's quantile is good to seven or eight only; the tests hold the two against each other.
  * @param probability above 0 and below 1.
- * @param numeratorDegrees above 0 (returns of the estimate on top). @param denominatorDegrees above 0; fractions allowed in both.
+ * @param numeratorDegrees from 0.1 to 1e6 (returns of the estimate on top). @param denominatorDegrees likewise; fractions allowed in
+ *   both.
  * @returns 0 or more.
  * @throws {DomainError} `variance-ratio-invalid`.
  * @see NIST Digital Library of Mathematical Functions 8.17 (incomplete beta function); the relation to F from any statistics text.
@@ -18,7 +19,7 @@ export function varianceRatioQuantile({
   numeratorDegrees: number;
   denominatorDegrees: number;
 }): number {
-  const areDegreesValid = [numeratorDegrees, denominatorDegrees].every((degrees) => degrees > 0 && degrees <= 1e6);
+  const areDegreesValid = [numeratorDegrees, denominatorDegrees].every((degrees) => degrees >= 0.1 && degrees <= 1e6);
   if (!(probability > 0 && probability < 1 && areDegreesValid)) {
     throw new DomainError('variance-ratio-invalid', { probability, numeratorDegrees, denominatorDegrees });
   }

@@ -60,6 +60,7 @@ describe('signFills', () => {
     ['decimal-invalid', [{ ...buy, fees: 'NaN' }]],
     ['price-negative', [{ ...buy, price: '-0.01' }]],
     ['multiplier-invalid', [{ ...buy, instrument: option('call', '102', { multiplier: '0' }) }]],
+    ['strike-not-positive', [{ ...buy, instrument: option('call', '0') }]],
     ['multipliers-mixed', [buy, { ...buy, instrument: option('call', '102', { multiplier: '10' }) }]],
     ['trade-time-invalid', [{ ...buy, tradedAt: 'yesterday' }]],
     ['sequence-invalid', [{ ...buy, sequence: NaN }]],
