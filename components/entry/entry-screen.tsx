@@ -1,4 +1,5 @@
 import { useRouter } from 'expo-router';
+import { type ReactNode } from 'react';
 import { View } from 'react-native';
 import { EntryHead } from '@/components/entry/entry-head';
 import { ExpectedBesideRealised } from '@/components/entry/expected-beside-realised';
@@ -6,6 +7,8 @@ import { FillsSection } from '@/components/entry/fills-section';
 import { LandingSection } from '@/components/entry/landing-section';
 import { LessonSection } from '@/components/entry/lesson-section';
 import { OddsOutcomeSection } from '@/components/entry/odds-outcome-section';
+import { ProcessSection } from '@/components/entry/process-section';
+import { ProfitSourceSection } from '@/components/entry/profit-source-section';
 import { SealedPlanSection } from '@/components/entry/sealed-plan-section';
 import { ScreenFrame } from '@/components/frame/screen-frame';
 import { UnreadyScreen } from '@/components/frame/unready-screen';
@@ -43,25 +46,35 @@ export function EntryScreen({ entryId }: { entryId: string }) {
     <ScreenFrame title={title} back={back} head={<EntryHead entry={sealedEntry} />}>
       <View style={{ gap: space.cardGap }}>
         <LandingSection entry={sealedEntry} />
-        <View
-          style={
-            layout === 'wide'
-              ? { flexDirection: 'row', gap: space.columnGap, alignItems: 'flex-start' }
-              : { gap: space.cardGap }
-          }
-        >
-          <View style={layout === 'wide' ? { flex: 1, minWidth: 0 } : undefined}>
-            <OddsOutcomeSection entry={sealedEntry} />
-          </View>
-          <View style={layout === 'wide' ? { flex: 1, minWidth: 0 } : undefined}>
-            <ExpectedBesideRealised entry={sealedEntry} />
-          </View>
-        </View>
+        <Pair>
+          <OddsOutcomeSection entry={sealedEntry} />
+          <ExpectedBesideRealised entry={sealedEntry} />
+        </Pair>
+        <Pair>
+          <ProfitSourceSection entry={sealedEntry} />
+          <ProcessSection entry={sealedEntry} />
+        </Pair>
         <FillsSection entry={sealedEntry} />
         <LessonSection entry={sealedEntry} />
         <SealedPlanSection entry={sealedEntry} />
         <CautionLine />
       </View>
     </ScreenFrame>
+  );
+}
+
+/** Two cards side by side where there is room. */
+function Pair({ children }: { children: readonly [ReactNode, ReactNode] }) {
+  const isWide = useLayout().kind === 'wide';
+  return (
+    <View
+      style={isWide ? { flexDirection: 'row', gap: space.columnGap, alignItems: 'flex-start' } : { gap: space.cardGap }}
+    >
+      {children.map((child, index) => (
+        <View key={index} style={isWide ? { flex: 1, minWidth: 0 } : undefined}>
+          {child}
+        </View>
+      ))}
+    </View>
   );
 }
