@@ -1,6 +1,7 @@
 import { logReturns } from '@/journal/returns/log-returns';
 import { quantile } from '@/journal/returns/quantile';
 import { closeDailyVolatility } from '@/journal/volatility/close-daily-volatility';
+import { requireWindow } from '@/journal/volatility/volatility-method';
 
 export interface PlaceInOwnYear {
   /** Share of the past values at or below the current one, 0 to 100. */
@@ -25,10 +26,11 @@ const FEWEST_VALUES = 20;
  * @param closes oldest first.
  * @param window returns in the window, from 2.
  * @returns the place, or null with fewer than 20 values to compare: a place among few says nothing.
- * @throws {DomainError} `close-invalid`.
+ * @throws {DomainError} `window-invalid`, `too-few-returns` for a window of 1, `close-invalid`.
  * @see common practice (empirical distribution of rolling estimates).
  */
 export function placeInOwnYear(closes: readonly number[], window = 21): PlaceInOwnYear | null {
+  requireWindow(window);
   if (closes.length < window + FEWEST_VALUES) return null;
   const returns = logReturns(closes.slice(-(SESSIONS_IN_A_YEAR + window)));
   const values: number[] = [];

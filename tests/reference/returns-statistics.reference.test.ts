@@ -70,5 +70,7 @@ describe('sample statistics against R on index returns', () => {
     );
     for (const [probability, expected] of entriesOf(one, 'quantiles_type7'))
       expectWithin(quantile(returns, Number(probability)), expected, 1e-13);
+    expectWithin(quantile(returns, 0), numberOf(one, 'min'), 1e-13);
+    expectWithin(quantile(returns, 1), numberOf(one, 'max'), 1e-13);
   });
 });

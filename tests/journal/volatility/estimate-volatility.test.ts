@@ -1,9 +1,11 @@
 import fc from 'fast-check';
 import { DomainError } from '@/journal/errors/domain-error';
 import { type PriceBar } from '@/journal/returns/price-bar';
+import { annualizedVolatility } from '@/journal/volatility/annualized-volatility';
 import { estimateCloseVolatility } from '@/journal/volatility/estimate-close-volatility';
 import { estimateRangeVolatility } from '@/journal/volatility/estimate-range-volatility';
 import { estimateVolatility, largestWindow } from '@/journal/volatility/estimate-volatility';
+import { ewmaEffectiveReturns } from '@/journal/volatility/ewma-daily-volatility';
 import { garmanKlassDailyVolatility } from '@/journal/volatility/garman-klass-daily-volatility';
 import { garmanKlassYangZhangDailyVolatility } from '@/journal/volatility/garman-klass-yang-zhang-daily-volatility';
 import { parkinsonDailyVolatility } from '@/journal/volatility/parkinson-daily-volatility';
@@ -53,6 +55,15 @@ describe('worked values computed outside this project with Python', () => {
     expect(parkinsonDailyVolatility(bars)).toBeCloseTo(0.0143, 6);
     expect(garmanKlassDailyVolatility(bars)).toBeCloseTo(0.015124, 6);
     expect(rogersSatchellDailyVolatility(bars)).toBeCloseTo(0.014581, 6);
+  });
+
+  it('are met by a year of 252 sessions: 22.02 %', () => {
+    const { dailyVolatility } = estimateCloseVolatility(closes, { kind: 'close', window: 5 });
+    expect(annualizedVolatility(dailyVolatility)).toBeCloseTo(0.2202, 4);
+  });
+
+  it('are met by the effective returns of the weighted method: 32.3 at 0.94', () => {
+    expect(ewmaEffectiveReturns(0.94)).toBeCloseTo(32.3, 1);
   });
 
   it('are met by the weight of Yang and Zhang at 20 sessions', () => {
