@@ -1,5 +1,6 @@
 import { attributeProfit, type ProfitParts } from '@/journal/attribution/attribute-profit';
-import { type AttributedLeg, type LegEnd } from '@/journal/attribution/attributed-leg';
+import { type AttributedLeg } from '@/journal/attribution/attributed-leg';
+import { attributedLot, type KnownAtEnd } from '@/journal/attribution/attributed-lot';
 import { type Fill } from '@/journal/fills/fill';
 import { type ClosedLot } from '@/journal/fills/lot';
 import { matchLots } from '@/journal/fills/lots';
@@ -42,11 +43,11 @@ export function profitSources(
       const midPrice = isTrade(fill) && fill.instrument.kind === 'option' ? (noted?.midPrice ?? null) : end.fillPrice;
       hasEveryMid &&= midPrice !== null;
       const state = marketState(question, { at: end.at, spotPrice: seen.price, instrument: lot.instrument });
-      return { state, fillPrice: end.fillPrice, midPrice, fees: end.fees, dailyVolatility: null } satisfies LegEnd;
+      return { state, midPrice, dailyVolatility: null } satisfies KnownAtEnd;
     });
     const [entry, exit] = ends;
     if (entry == null || exit == null) return null;
-    legs.push({ ...legOf(lot), legId: String(index), entry, exit });
+    legs.push(attributedLot(lot, { legId: String(index), entry, exit }));
   }
   if (legs.length === 0) return null;
   const { total } = attributeProfit(legs, { fallbackDailyVolatility: input.volatility.base });
@@ -58,22 +59,10 @@ interface LotEnd {
   readonly fillId: string;
   readonly at: string;
   readonly fillPrice: string;
-  readonly fees: string;
 }
 
 function endOf(lot: ClosedLot, which: 'open' | 'close'): LotEnd {
   return which === 'open'
-    ? { fillId: lot.openFillId ?? '', at: lot.openedAt, fillPrice: lot.openPrice, fees: lot.openFees }
-    : { fillId: lot.closeFillId, at: lot.closedAt, fillPrice: lot.closePrice, fees: lot.closeFees };
-}
-
-function legOf({ instrument, direction, quantity }: ClosedLot): Omit<AttributedLeg, 'legId' | 'entry' | 'exit'> {
-  return {
-    instrument:
-      instrument.kind === 'stock'
-        ? { kind: 'stock' }
-        : { kind: 'option', type: instrument.type, strikePrice: Number(instrument.strikePrice) },
-    signedQuantity: direction === 'long' ? quantity : `-${quantity}`,
-    multiplier: instrument.multiplier,
-  };
+    ? { fillId: lot.openFillId ?? '', at: lot.openedAt, fillPrice: lot.openPrice }
+    : { fillId: lot.closeFillId, at: lot.closedAt, fillPrice: lot.closePrice };
 }

@@ -1,15 +1,17 @@
 import * as fc from 'fast-check';
 import { attributeProfit } from '@/journal/attribution/attribute-profit';
-import { attributedLots, type KnownAtEnd } from '@/journal/attribution/attributed-lots';
+import { attributedLot } from '@/journal/attribution/attributed-lot';
+import { type ClosedLot } from '@/journal/fills/lot';
 import { matchLots } from '@/journal/fills/lots';
 import { fillsInOrder, option, zqxaStock } from '@/tests/journal/fills/fill-fixtures';
 import { testDLeg, testDOptions } from '@/tests/journal/attribution/test-d-leg';
 
 const seed = 20261201;
-const knownOf = ({ state, midPrice, dailyVolatility }: KnownAtEnd) => ({ state, midPrice, dailyVolatility });
-const asInTestD = (_lot: unknown, end: 'entry' | 'exit') => knownOf(testDLeg[end]);
+const { entry, exit } = testDLeg;
+const asInTestD = (lots: readonly ClosedLot[]) =>
+  lots.map((lot, index) => attributedLot(lot, { legId: String(index), entry, exit }));
 
-describe('attributedLots', () => {
+describe('attributedLot', () => {
   it('carries test D from its fills to 318.35, bought in two parts', () => {
     const call = option('call', '102');
     const { closed, realisedProfit } = matchLots(
@@ -20,8 +22,11 @@ describe('attributedLots', () => {
       ]),
       { method: 'fifo' },
     );
-    const { total, legs } = attributeProfit(attributedLots(closed, asInTestD), testDOptions);
-    expect(legs.map(({ legId }) => legId)).toEqual(['f1 f3 0', 'f2 f3 1']);
+    const { total, legs } = attributeProfit(asInTestD(closed), testDOptions);
+    expect(legs.map(({ legId, slippage }) => [legId, slippage])).toEqual([
+      ['0', '-8'],
+      ['1', '-12'],
+    ]);
     expect(total).toMatchObject({ slippage: '-20', fees: '-6.65', markResidual: '-4.4', realisedProfit });
     expect(realisedProfit).toBe('318.35');
   });
@@ -38,7 +43,7 @@ describe('attributedLots', () => {
       fc.property(fc.array(trade, { minLength: 2, maxLength: 12 }), (trades) => {
         const { closed, realisedProfit } = matchLots(fillsInOrder(trades), { method: 'fifo' });
         fc.pre(closed.length > 0);
-        const { total } = attributeProfit(attributedLots(closed, asInTestD), testDOptions);
+        const { total } = attributeProfit(asInTestD(closed), testDOptions);
         expect(total.realisedProfit).toBe(realisedProfit);
       }),
       { seed, numRuns: 200 },
