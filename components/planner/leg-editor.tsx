@@ -132,6 +132,7 @@ function LegFigures({ index, currency }: { index: number; currency: string }) {
     leg.impliedDailyVolatility === null
       ? {
           'below-intrinsic': 'premium below intrinsic value',
+          'no-time-value': 'premium without time value',
           'above-maximum': 'premium above its maximum',
           'no-time-left': 'no time left',
         }[leg.impliedNone ?? 'no-time-left']

@@ -1,105 +1,135 @@
-import { expMinusHalfSquare, scaledUpperTail, upperTailWithBell } from '@/journal/distributions/normal-distribution';
+import { expMinusHalfSquare, normalUpperTail, scaledUpperTail } from '@/journal/distributions/normal-distribution';
+import { TAIL_SERIES } from '@/journal/distributions/tail-series';
+import { logRatio } from '@/journal/pricing/log-ratio';
 
-const ONE_OVER_ROOT_TWO_PI = 0.3989422804014327;
-/** From here on tails are taken as a ratio to their exponential, which the two terms of a price share. */
-const TAIL_STARTS = 0.7;
+/**
+ * Places within one row of {@link outOfTheMoneyRows}. Rows lie in one typed array, so that numbers pass between functions without
+ * an object each and an option fills one line of the cache.
+ */
+export const enum Term {
+  /** In: spot less the yield to expiry, above 0. */
+  PresentSpot,
+  /** In: the strike discounted, above 0. */
+  PresentStrike,
+  /** In: ln(present spot / present strike), which may have more digits than those two. */
+  LogMoneyness,
+  /** In: standard deviation of the log price to expiry, 0 or more. */
+  TotalDeviation,
+  /** Out: value of whichever of call and put is out of the money, currency per share. */
+  Price,
+  /** Out: Φ(d1) of the call or Φ(−d1) of the put, whichever is out of the money. */
+  SpotTail,
+  /** Out: Φ(d2) of the call or Φ(−d2) of the put, whichever is out of the money: its chance of ending in the money. */
+  StrikeTail,
+  /** Out: present spot times φ(d1), which equals present strike times φ(d2). */
+  SpotDensity,
+  RowLength,
+}
+
+/** Room for `count` options. */
+export function outOfTheMoneyRows(count: number): Float64Array {
+  return new Float64Array(count * Term.RowLength);
+}
+
+/**
+ * Fills the places marked Out of the first `count` rows.
+ *
+ * By symmetry the option depends on the larger and the smaller of the present values only. With m = |ln moneyness|/deviation,
+ * near = m − deviation/2 and far = m + deviation/2 it is worth smaller·P(Z > near) − larger·P(Z > far), and
+ * smaller·φ(near) = larger·φ(far), so that one exponential serves both. What is left of the tails is subtracted as a divided
+ * difference of their series (two rows of Horner's scheme) where the deviation is small, so that no digit cancels.
+ *
+ * Relative error a few roundings times 1 + near², the most that a logarithm in doubles allows, down to 1e-300. Without deviation
+ * prices and tails are 0, the tails one half where the logarithm is 0 too; at equal present values the call is taken to be the one
+ * out of the money.
+ * @see Black and Scholes (1973), J. Political Economy 81; Jäckel (2015), Let's be rational, Wilmott, on the cancellation; the way
+ *   round it is our own.
+ */
+export function fillOutOfTheMoney(rows: Float64Array, count: number): void {
+  const c = TAIL_SERIES;
+  for (let at = 0; at < count * Term.RowLength; at += Term.RowLength) {
+    const spot = rows[at + Term.PresentSpot] ?? NaN;
+    const strike = rows[at + Term.PresentStrike] ?? NaN;
+    const deviation = rows[at + Term.TotalDeviation] ?? NaN;
+    const moneyness = Math.abs(rows[at + Term.LogMoneyness] ?? NaN) / deviation;
+    const near = moneyness - deviation / 2;
+    const bell = expMinusHalfSquare(near);
+    let ratio: number;
+    let farRatio: number;
+    let drop: number;
+    if (deviation <= 1 / 16 && near < 39) {
+      const node = (moneyness * 16 + 16.5) | 0; // nodes lie a sixteenth apart, from -1
+      const y = node / 16 - 1 - near;
+      const z = y - deviation;
+      const row = node * 12;
+      const b10 = c[row + 10] ?? NaN;
+      const b9 = (c[row + 9] ?? NaN) + y * b10;
+      const b8 = (c[row + 8] ?? NaN) + y * b9;
+      const b7 = (c[row + 7] ?? NaN) + y * b8;
+      const b6 = (c[row + 6] ?? NaN) + y * b7;
+      const b5 = (c[row + 5] ?? NaN) + y * b6;
+      const b4 = (c[row + 4] ?? NaN) + y * b5;
+      const b3 = (c[row + 3] ?? NaN) + y * b4;
+      const b2 = (c[row + 2] ?? NaN) + y * b3;
+      const b1 = (c[row + 1] ?? NaN) + y * b2;
+      const slope =
+        b1 + z * (b2 + z * (b3 + z * (b4 + z * (b5 + z * (b6 + z * (b7 + z * (b8 + z * (b9 + z * b10))))))));
+      ratio = (c[row] ?? NaN) + y * b1;
+      drop = deviation * slope;
+      farRatio = ratio - drop;
+    } else if (near >= -1 && near < 39) {
+      ratio = scaledUpperTail(near);
+      farRatio = scaledUpperTail(moneyness + deviation / 2);
+      drop = ratio - farRatio;
+    } else {
+      fillExtreme(rows, at);
+      continue;
+    }
+    const isSpotLarger = spot > strike;
+    const smaller = isSpotLarger ? strike : spot;
+    const larger = isSpotLarger ? spot : strike;
+    const nearTail = bell * ratio;
+    const farTail = bell * farRatio * (smaller / larger);
+    rows[at + Term.Price] = smaller * bell * drop;
+    rows[at + Term.SpotTail] = isSpotLarger ? farTail : nearTail;
+    rows[at + Term.StrikeTail] = isSpotLarger ? nearTail : farTail;
+    rows[at + Term.SpotDensity] = smaller * bell * 0.3989422804014327; // 1/sqrt(2π)
+  }
+}
+
+/** No deviation, none to speak of against the distance, or several: here tails are whole, not ratios. */
+function fillExtreme(rows: Float64Array, at: number): void {
+  const spot = rows[at + Term.PresentSpot] ?? NaN;
+  const strike = rows[at + Term.PresentStrike] ?? NaN;
+  const deviation = rows[at + Term.TotalDeviation] ?? NaN;
+  const distance = Math.abs(rows[at + Term.LogMoneyness] ?? NaN);
+  const isSpotLarger = spot > strike;
+  const smaller = Math.min(spot, strike);
+  const near = deviation > 0 ? distance / deviation - deviation / 2 : distance > 0 ? Infinity : 0;
+  const bell = deviation > 0 ? expMinusHalfSquare(near) : 0;
+  const nearTail = normalUpperTail(near);
+  const farShare = deviation > 0 ? bell * scaledUpperTail(distance / deviation + deviation / 2) : nearTail;
+  const farTail = farShare > 0 ? farShare * (smaller / Math.max(spot, strike)) : farShare;
+  rows[at + Term.Price] = smaller * (nearTail - farShare);
+  rows[at + Term.SpotTail] = isSpotLarger ? farTail : nearTail;
+  rows[at + Term.StrikeTail] = isSpotLarger ? nearTail : farTail;
+  rows[at + Term.SpotDensity] = smaller * bell * 0.3989422804014327;
+}
+
+const one = outOfTheMoneyRows(1);
 
 /**
  * Value of whichever of call and put is out of the money.
- * By symmetry it depends on the larger and the smaller of the present values only, so calls and puts keep their digits alike.
  * @param presentSpot spot less the yield to expiry, above 0; `presentStrike` the strike discounted, above 0;
  *   `totalDeviation` standard deviation of the log price to expiry, 0 or more.
  * @returns currency per share, 0 or more; relative accuracy as good as the inputs allow, down to 1e-300.
- * @see Black and Scholes (1973), J. Political Economy 81. With m = ln(larger/smaller)/deviation, near and far m ∓ deviation/2:
- *   smaller·P(Z > near) − larger·P(Z > far).
+ * @see as {@link fillOutOfTheMoney}.
  */
 export function outOfTheMoneyPrice(presentSpot: number, presentStrike: number, totalDeviation: number): number {
-  const larger = Math.max(presentSpot, presentStrike);
-  const smaller = Math.min(presentSpot, presentStrike);
-  return totalDeviation > 0 ? priceOfRatio(larger, smaller, logRatio(larger, smaller), totalDeviation) : 0;
-}
-
-/**
- * The same where ln(larger / smaller) is known from elsewhere. Numbers by position, not in an object: this is the innermost
- * step of every lattice and search.
- * @param larger the larger present value, `smaller` the other; `logOfRatio` 0 or more; `totalDeviation` above 0.
- */
-export function priceOfRatio(larger: number, smaller: number, logOfRatio: number, totalDeviation: number): number {
-  const moneyness = logOfRatio / totalDeviation;
-  const near = moneyness - totalDeviation / 2;
-  const far = moneyness + totalDeviation / 2;
-  // Both terms carry the same exponential, smaller·φ(near) = larger·φ(far); taken once, its rounding cannot part them.
-  const bell = expMinusHalfSquare(near);
-  const price =
-    near > TAIL_STARTS
-      ? smaller * bell * (scaledUpperTail(near) - scaledUpperTail(far))
-      : smaller * upperTailWithBell(near, bell) - larger * upperTailWithBell(far, bell * (smaller / larger));
-  return price > 0 ? price : 0;
-}
-
-export interface OutOfTheMoneyTerms {
-  /** As {@link outOfTheMoneyPrice}. */
-  readonly price: number;
-  /** Φ(d1) of the call or Φ(−d1) of the put, whichever is out of the money. */
-  readonly spotTail: number;
-  /** Φ(d2) of the call or Φ(−d2) of the put, whichever is out of the money: its chance of ending in the money. */
-  readonly strikeTail: number;
-  /** Present spot times φ(d1), which equals present strike times φ(d2). */
-  readonly spotDensity: number;
-  /** ln(present spot / present strike). */
-  readonly logMoneyness: number;
-}
-
-/**
- * The out-of-the-money price with the terms that the Greeks are made of.
- * @param presentSpot and the others as for {@link outOfTheMoneyPrice}; without deviation the tails are 0, and one half each
- *   where spot and strike are equal.
- * @see as {@link outOfTheMoneyPrice}.
- */
-export function outOfTheMoneyTerms(
-  presentSpot: number,
-  presentStrike: number,
-  totalDeviation: number,
-): OutOfTheMoneyTerms {
-  const isSpotLarger = presentSpot > presentStrike;
-  const larger = isSpotLarger ? presentSpot : presentStrike;
-  const smaller = isSpotLarger ? presentStrike : presentSpot;
-  const logOfRatio = logRatio(larger, smaller);
-  const logMoneyness = isSpotLarger ? logOfRatio : -logOfRatio;
-  if (!(totalDeviation > 0)) {
-    const tail = larger === smaller ? 0.5 : 0;
-    return { price: 0, spotTail: tail, strikeTail: tail, spotDensity: 0, logMoneyness };
-  }
-  const moneyness = logOfRatio / totalDeviation;
-  const near = moneyness - totalDeviation / 2;
-  const far = moneyness + totalDeviation / 2;
-  const bell = expMinusHalfSquare(near);
-  const farBell = bell * (smaller / larger);
-  let nearTail: number;
-  let farTail: number;
-  let price: number;
-  if (near > TAIL_STARTS) {
-    const nearRatio = scaledUpperTail(near);
-    const farRatio = scaledUpperTail(far);
-    nearTail = bell * nearRatio;
-    farTail = farBell * farRatio;
-    price = smaller * bell * (nearRatio - farRatio);
-  } else {
-    nearTail = upperTailWithBell(near, bell);
-    farTail = upperTailWithBell(far, farBell);
-    price = smaller * nearTail - larger * farTail;
-  }
-  return {
-    price: price > 0 ? price : 0,
-    spotTail: isSpotLarger ? farTail : nearTail,
-    strikeTail: isSpotLarger ? nearTail : farTail,
-    spotDensity: smaller * bell * ONE_OVER_ROOT_TWO_PI,
-    logMoneyness,
-  };
-}
-
-/** ln(larger / smaller), with all digits where the two are close. */
-function logRatio(larger: number, smaller: number): number {
-  const excess = (larger - smaller) / smaller;
-  return excess < 0.5 ? Math.log1p(excess) : Math.log(larger / smaller);
+  one[Term.PresentSpot] = presentSpot;
+  one[Term.PresentStrike] = presentStrike;
+  one[Term.LogMoneyness] = logRatio(presentSpot, presentStrike);
+  one[Term.TotalDeviation] = totalDeviation;
+  fillOutOfTheMoney(one, 1);
+  return one[Term.Price] ?? NaN;
 }

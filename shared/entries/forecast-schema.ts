@@ -110,7 +110,7 @@ export const forecastSchema = z.strictObject({
     z.strictObject({
       legId: idSchema,
       impliedDailyVolatility: number.nullable(),
-      impliedNone: z.enum(['below-intrinsic', 'above-maximum', 'no-time-left']).nullable(),
+      impliedNone: z.enum(['below-intrinsic', 'no-time-value', 'above-maximum', 'no-time-left']).nullable(),
       modelPrice: lowBaseHighSchema,
       greeks: z.strictObject({
         delta: number,

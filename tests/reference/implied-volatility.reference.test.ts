@@ -22,7 +22,14 @@ describe('implied volatility against 60-digit roots', () => {
     if (answer.kind !== 'none') throw new Error(`${one.id}: ${answer.dailyVolatility}`);
     const price = numberOf(one, 'price');
     const [lower, upper] = [numberOf(one, 'lower_bound'), numberOf(one, 'upper_bound')];
-    const broken = numberOf(one, 'T') === 0 ? 'no-time-left' : price >= upper ? 'above-maximum' : 'below-intrinsic';
+    const broken =
+      numberOf(one, 'T') === 0
+        ? 'no-time-left'
+        : price >= upper
+          ? 'above-maximum'
+          : price === lower
+            ? 'no-time-value'
+            : 'below-intrinsic';
     expect(answer.bound).toBe(broken);
     expectWithin(answer.limit, broken === 'above-maximum' ? upper : lower, 1e-12 * upper); // a few roundings
   });

@@ -80,10 +80,10 @@ describe('implied daily volatility', () => {
     {
       why: 'the price is exactly intrinsic',
       change: { strikePrice: 90, ratePerYear: 0, price: 10 },
-      bound: 'below-intrinsic',
+      bound: 'no-time-value',
     },
     { why: 'a call costs as much as the stock', change: { price: 100 }, bound: 'above-maximum' },
-    { why: 'the price is 0', change: { price: 0 }, bound: 'below-intrinsic' },
+    { why: 'the price is 0', change: { price: 0 }, bound: 'no-time-value' },
     { why: 'the price is negative', change: { price: -0.01 }, bound: 'below-intrinsic' },
     { why: 'no session is left', change: { sessions: 0 }, bound: 'no-time-left' },
   ])('says $bound when $why', ({ change, bound }) => {
