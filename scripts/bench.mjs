@@ -34,11 +34,15 @@ try {
 console.log(missed === 0 ? '\nEvery aim is met.' : `\n${missed} of ${names.length} aims missed.`);
 
 /** Prints one report; its first row is the baseline, the second the one with an aim. */
-function isAimMet({ title, aim, rows }) {
+function isAimMet({ title, aim, rows, skipped }) {
+  if (skipped !== undefined) {
+    console.log(`\n${title}\n  skipped: ${skipped}`);
+    return true;
+  }
   const width = Math.max(...rows.map(({ name }) => name.length));
   console.log(`\n${title}`);
   for (const [index, { name, perSecond, ratio }] of rows.entries()) {
-    const figures = `${Math.round(perSecond).toLocaleString('en').padStart(14)}${`${ratio.toFixed(1)}×`.padStart(10)}`;
+    const figures = `${Math.round(perSecond).toLocaleString('en').padStart(14)}${`${ratio.toFixed(ratio < 10 ? 2 : 1)}×`.padStart(10)}`;
     console.log(`  ${name.padEnd(width)}${figures}${index === 1 ? `  (aim ${aim}×)` : ''}`);
   }
   return rows[1].ratio >= aim;

@@ -4,6 +4,12 @@ export interface Contender {
   readonly work: (count: number) => number;
 }
 
+/** A process of its own that times itself, once a round. */
+export interface TimedElsewhere {
+  readonly name: string;
+  readonly measurePerSecond: () => number;
+}
+
 export interface SpeedRow {
   readonly name: string;
   readonly perSecond: number;
@@ -18,18 +24,30 @@ const ROUND_MILLISECONDS = 60;
  * Measures contenders against a baseline in one run. Rounds alternate between all of them, so that a slow moment of the machine
  * falls on each alike, and medians are compared.
  */
-export function compareSpeed(baseline: Contender, contenders: readonly Contender[]): SpeedRow[] {
+export function compareSpeed(baseline: Contender | TimedElsewhere, contenders: readonly Contender[]): SpeedRow[] {
   const measured = [baseline, ...contenders].map((contender) => ({
-    ...contender,
-    count: countForRound(contender),
+    contender,
+    measure: measureOf(contender),
     rates: [] as number[],
   }));
   for (let round = 0; round < ROUNDS; round += 1) {
-    for (const { work, count, rates } of measured) rates.push((count * 1000) / timeOf(() => work(count)));
+    for (const { measure, rates } of measured) rates.push(measure());
   }
-  const [slow, ...rest] = measured.map(({ name, rates }) => ({ name, perSecond: median(rates) }));
+  const [slow, ...rest] = measured.map(({ contender, rates }) => ({
+    name: contender.name,
+    perSecond: median(rates),
+  }));
   if (slow === undefined) throw new Error('nothing was measured');
-  return [slow, ...rest].map((row) => ({ ...row, ratio: row.perSecond / slow.perSecond }));
+  return [slow, ...rest].map((row) => ({
+    ...row,
+    ratio: row.perSecond / slow.perSecond,
+  }));
+}
+
+function measureOf(contender: Contender | TimedElsewhere): () => number {
+  if ('measurePerSecond' in contender) return contender.measurePerSecond;
+  const count = countForRound(contender);
+  return () => (count * 1000) / timeOf(() => contender.work(count));
 }
 
 /** Doubles the count until a round takes long enough to be timed; this also warms the code up. */

@@ -8,3 +8,8 @@ export function reportSpeed(report: {
 }): void {
   console.log(JSON.stringify(report));
 }
+
+/** Says instead why nothing could be measured here. */
+export function reportSkipped(report: { readonly title: string; readonly skipped: string }): void {
+  console.log(JSON.stringify(report));
+}
