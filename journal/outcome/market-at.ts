@@ -1,8 +1,9 @@
 import { type MarketState } from '@/journal/attribution/attributed-leg';
 import { type ForecastInput } from '@/journal/forecast/forecast-input';
-import { type Instrument } from '@/journal/fills/fill';
+import { type Fill, type Instrument } from '@/journal/fills/fill';
 import { toModelNumber } from '@/journal/money/decimal';
 import { type OutcomeBar } from '@/journal/outcome/entry-outcome';
+import { settlementOf } from '@/journal/outcome/settlement-value';
 import { calendarYears } from '@/journal/sessions/calendar-years';
 import { type ExchangeCalendar } from '@/journal/sessions/exchange-calendar';
 import { instantMilliseconds } from '@/journal/sessions/instant';
@@ -14,8 +15,8 @@ export interface FillMarks {
   readonly midPrice: string | null;
 }
 
-/** Where a price of the underlying comes from: noted with the fill, or the close of the fill's session. */
-export type UnderlyingSource = 'noted' | 'close';
+/** Where a price of the underlying comes from: noted with the fill, official at expiry, or the close of the fill's session. */
+export type UnderlyingSource = 'noted' | 'settlement' | 'close';
 
 export interface MarketQuestion {
   readonly input: ForecastInput;
@@ -39,6 +40,25 @@ export function underlyingAt(
   const session = sessionEndingAfter(calendar, instantMilliseconds(at) - 1);
   const bar = barsSince.find(({ sessionDate }) => sessionDate === session.date);
   return bar === undefined ? null : { price: bar.close, source: 'close' };
+}
+
+/**
+ * The price of the underlying at a fill: as underlyingAt, but an option that ends on its expiry day ends by the settlement value.
+ * @param noted decimal text of the price noted with the fill, or null.
+ * @returns null while that value, or the close of the fill's session, is not there.
+ */
+export function underlyingAtFill(
+  question: MarketQuestion,
+  { kind, instrument, tradedAt }: Fill,
+  noted: string | null,
+): { readonly price: number; readonly source: UnderlyingSource } | null {
+  const isEnding = kind !== 'buy' && kind !== 'sell';
+  const session = sessionEndingAfter(question.calendar, instantMilliseconds(tradedAt) - 1);
+  const isSettled = isEnding && instrument.kind === 'option' && instrument.expirySessionDate === session.date;
+  if (!isSettled || noted !== null) return underlyingAt(question, tradedAt, noted);
+  const bar = question.barsSince.find(({ sessionDate }) => sessionDate === session.date);
+  const price = bar === undefined ? null : settlementOf(question.input, bar);
+  return price === null ? null : { price, source: 'settlement' };
 }
 
 /**

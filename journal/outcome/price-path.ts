@@ -1,6 +1,7 @@
 import { type PlanModel } from '@/journal/forecast/plan-model';
 import { type OutcomeBar, type PricedBy } from '@/journal/outcome/entry-outcome';
 import { type HoldEnd } from '@/journal/outcome/hold-end';
+import { settlementOf } from '@/journal/outcome/settlement-value';
 import { type ExchangeCalendar, previousSession } from '@/journal/sessions/exchange-calendar';
 
 export interface ObservedPrice {
@@ -47,7 +48,7 @@ export function pricePath(
   }
   if (last === undefined) return waiting(`the close of ${session.date}`);
   if (kind === 'close') {
-    const settlement = session.date === model.horizon.expirySessionDate ? settlementOf(model, last) : null;
+    const settlement = session.date === model.horizon.expirySessionDate ? settlementOf(model.input, last) : null;
     return endedBy(session.closesAt, settlement ?? last.close, 'close');
   }
   if (last.open !== null && session.opensAt > startsAt) return endedBy(session.opensAt, last.open, 'open');
@@ -56,21 +57,4 @@ export function pricePath(
   return observed.at(-1)?.sessionDate === before.date
     ? { observed, waitsFor: null }
     : waiting(`the close of ${before.date}`);
-}
-
-/** The value that settles the plan's options, or null while it is not there. */
-export function settlementValue({
-  model,
-  barsSince,
-}: {
-  readonly model: PlanModel;
-  readonly barsSince: readonly OutcomeBar[];
-}): number | null {
-  const bar = barsSince.find(({ sessionDate }) => sessionDate === model.horizon.expirySessionDate);
-  return bar === undefined ? null : settlementOf(model, bar);
-}
-
-/** Settled from openings, the close says nothing: only the official value does. */
-function settlementOf({ input }: PlanModel, bar: OutcomeBar): number | null {
-  return bar.settlement ?? (input.underlying.settlementTime === 'pm' ? bar.close : null);
 }

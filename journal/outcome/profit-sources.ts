@@ -4,7 +4,7 @@ import { attributedLot, type KnownAtEnd } from '@/journal/attribution/attributed
 import { type Fill } from '@/journal/fills/fill';
 import { type ClosedLot } from '@/journal/fills/lot';
 import { matchLots } from '@/journal/fills/lots';
-import { type FillMarks, marketState, type MarketQuestion, underlyingAt } from '@/journal/outcome/market-at';
+import { type FillMarks, marketState, type MarketQuestion, underlyingAtFill } from '@/journal/outcome/market-at';
 
 /** Where the profit of what was closed came from; the parts add up to it exactly. */
 export interface ProfitSources extends ProfitParts {
@@ -37,7 +37,7 @@ export function profitSources(
     const ends = [endOf(lot, 'open'), endOf(lot, 'close')].map((end) => {
       const fill = byId.get(end.fillId);
       const noted = marks.get(end.fillId);
-      const seen = underlyingAt(question, end.at, noted?.underlyingPrice ?? null);
+      const seen = fill === undefined ? null : underlyingAtFill(question, fill, noted?.underlyingPrice ?? null);
       if (fill === undefined || seen === null) return null;
       sources.add(seen.source);
       const midPrice = isTrade(fill) && fill.instrument.kind === 'option' ? (noted?.midPrice ?? null) : end.fillPrice;

@@ -5,7 +5,7 @@ import { toModelNumber } from '@/journal/money/decimal';
 import { type Answer, type AnswerContext } from '@/journal/outcome/answer';
 import { answerTouch } from '@/journal/outcome/answer-touch';
 import { type OutcomeBar } from '@/journal/outcome/entry-outcome';
-import { settlementValue } from '@/journal/outcome/price-path';
+import { settlementOf } from '@/journal/outcome/settlement-value';
 
 const known = (happened: boolean, monitoredBy: 'range' | 'closes' | null = null): Answer => ({
   kind: 'known',
@@ -41,6 +41,12 @@ export function answerOdds({ event, dueSessionDate }: StatedOdds, context: Answe
     case 'touch-stop':
       return answerTouch(toModelNumber(event.level), context);
   }
+}
+
+/** The value that settles the plan's options, or null while it is not there. */
+function settlementValue({ model, barsSince }: AnswerContext): number | null {
+  const bar = barsSince.find(({ sessionDate }) => sessionDate === model.horizon.expirySessionDate);
+  return bar === undefined ? null : settlementOf(model.input, bar);
 }
 
 function waitForSettlement({ model }: AnswerContext): Answer {

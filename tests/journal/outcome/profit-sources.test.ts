@@ -108,6 +108,21 @@ describe('where a profit came from', () => {
   });
 });
 
+describe('an option that ended on its expiry day', () => {
+  it('is valued by the settlement value, not by the close, and leaves no residual', () => {
+    const ended: Fill = { ...sold, kind: 'expiry', price: '1.00', fees: '0', tradedAt: '2026-12-18T21:00:00.000Z' };
+    const marks = new Map([['in', { underlyingPrice: '100', midPrice: '1.08' }]]);
+    const barsSince = [outcomeBar('2026-12-18', 99, { settlement: 103 })];
+    const { sources } = resolve({ fills: [bought, ended], barsSince, marks });
+    expect(sources).toMatchObject({
+      volatility: '0',
+      markResidual: '0',
+      realisedProfit: '-53.33',
+      underlyingFrom: 'noted',
+    });
+  });
+});
+
 describe('how the plan was carried out', () => {
   it('is sealed before the fill, within size, over the planned price and left by the target', () => {
     expect(resolve().process).toMatchObject({
