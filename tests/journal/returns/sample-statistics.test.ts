@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { logRatio } from '@/journal/returns/log-ratio';
 import { logReturns } from '@/journal/returns/log-returns';
+import { quantile } from '@/journal/returns/quantile';
 import { sampleStatistics } from '@/journal/returns/sample-statistics';
 import { closeDailyVolatility } from '@/journal/volatility/close-daily-volatility';
 import { ewmaDailyVolatility } from '@/journal/volatility/ewma-daily-volatility';
@@ -87,6 +88,39 @@ describe('statistics of a sample', () => {
     [[1, 1.5e308], 'value-invalid'],
   ])('are refused from %j as %s', (values, code) => {
     expect(() => sampleStatistics(values)).toThrow(expect.objectContaining({ code }));
+  });
+});
+
+describe('a quantile', () => {
+  it('lies between the least and the largest, rises with the probability, and is either at the ends, for any finite sample', () => {
+    const values = fc.array(fc.double({ noNaN: true, noDefaultInfinity: true }), { minLength: 1, maxLength: 9 });
+    const probability = fc.double({ min: 0, max: 1, noNaN: true });
+    fc.assert(
+      fc.property(values, probability, probability, (some, one, other) => {
+        const at = (place: number) => quantile(some, place);
+        const [least, most] = [Math.min(...some), Math.max(...some)];
+        expect(at(0)).toBeCloseTo(least, 15);
+        expect(at(1)).toBeCloseTo(most, 15);
+        expect(at(one) >= least && at(one) <= most).toBe(true);
+        expect(at(Math.min(one, other)) <= at(Math.max(one, other))).toBe(true);
+      }),
+      { seed: SEED, numRuns: 500 },
+    );
+  });
+
+  it('lies between two huge values of unlike sign', () => {
+    expect(quantile([-1e308, 1.5e308], 0)).toBe(-1e308);
+    expect(quantile([-1e308, 1.5e308], 0.5)).toBe(0.25e308);
+  });
+
+  it.each([
+    [[], 0.5, 'too-few-values'],
+    [[1], -0.1, 'probability-out-of-range'],
+    [[1], Number.NaN, 'probability-out-of-range'],
+    [[1, Number.NaN], 0.5, 'value-invalid'],
+    [[1, Infinity], 0.5, 'value-invalid'],
+  ])('of %j at %p is refused as %s', (values, probability, code) => {
+    expect(() => quantile(values, probability)).toThrow(expect.objectContaining({ code }));
   });
 });
 
