@@ -1,4 +1,5 @@
 import { bracketedRoot } from '@/journal/forecast/bracketed-root';
+import { normalNodes, normalWeighted, type PriceBend } from '@/journal/forecast/normal-quadrature';
 import { probabilityBetween, tailsAt } from '@/journal/forecast/normal-tails';
 import { monotonePieces, type MonotonePiece } from '@/journal/forecast/monotone-pieces';
 import { joinRanges, type LognormalPrice, type ProfitLaw } from '@/journal/forecast/profit-law';
@@ -7,8 +8,8 @@ import { joinRanges, type LognormalPrice, type ProfitLaw } from '@/journal/forec
 export interface ProfitCurve {
   /** Continuous, finite for every price above 0. */
   readonly profitAt: (spotPrice: number) => number;
-  /** Where it bends sharply: the log price moves over which it does, 0 for a corner. */
-  readonly bends: readonly { readonly price: number; readonly width: number }[];
+  /** Where it bends sharply. */
+  readonly bends: readonly PriceBend[];
   /** Amounts closer than this cannot be told apart (rounding of the values); above 0. */
   readonly resolution: number;
   /** Its limits toward a price of 0 and without end; infinite where it has none. */
@@ -17,19 +18,7 @@ export interface ProfitCurve {
   readonly mean?: number;
 }
 
-/** Deviations beyond which nothing counts: P(|Z| > 9) is 2e-19. */
-const REACH = 9;
-const SPACING = 1 / 16;
-const BEND_REACH = 6;
-const BEND_STEPS = 24;
 const ROOT_TOLERANCE = 1e-14;
-/** Gauss-Legendre rule of three points on [-1, 1]. */
-const GAUSS = [
-  { place: -Math.sqrt(0.6), weight: 5 / 18 },
-  { place: 0, weight: 8 / 18 },
-  { place: Math.sqrt(0.6), weight: 5 / 18 },
-] as const;
-const ROOT_TWO_PI = Math.sqrt(2 * Math.PI);
 
 /**
  * Distribution of a profit that is a curved function of a lognormal price.
@@ -45,7 +34,7 @@ export function curvedProfitLaw(curve: ProfitCurve, price: LognormalPrice): Prof
   const { resolution, limits } = curve;
   const priceOf = (standard: number) => price.spotPrice * Math.exp(price.logDrift + price.totalDeviation * standard);
   const profitOf = (standard: number) => curve.profitAt(priceOf(standard));
-  const { standards, profits, pieces } = monotonePieces(profitOf, nodesOf(curve, price), resolution);
+  const { standards, profits, pieces } = monotonePieces(profitOf, normalNodes(curve.bends, price), resolution);
   const sorted = Float64Array.from(profits).sort();
   const [lowest = 0, highest = 0] = [sorted[0], sorted[sorted.length - 1]];
 
@@ -139,23 +128,6 @@ function spanAbove(
   return below[1] < to ? [{ from: below[1], to }] : [];
 }
 
-/** Even steps over everything that counts, with the bends' own where those are finer. */
-function nodesOf({ bends }: ProfitCurve, { spotPrice, logDrift, totalDeviation }: LognormalPrice): Float64Array {
-  const nodes: number[] = [];
-  for (let step = -REACH / SPACING; step <= REACH / SPACING; step += 1) nodes.push(step * SPACING);
-  for (const { price, width } of bends) {
-    const centre = (Math.log(price / spotPrice) - logDrift) / totalDeviation;
-    const reach = (BEND_REACH * width) / totalDeviation;
-    if (reach > BEND_STEPS * SPACING) continue;
-    const steps = reach > 0 ? BEND_STEPS : 0;
-    for (let step = -steps; step <= steps; step += 1) {
-      const node = centre + (reach * step) / BEND_STEPS;
-      if (Math.abs(node) < REACH) nodes.push(node);
-    }
-  }
-  return Float64Array.from(nodes).sort();
-}
-
 /** Where a monotone piece takes an amount that lies between its ends. */
 function crossing(
   profitOf: (standard: number) => number,
@@ -195,12 +167,7 @@ function weightedProfit(
   for (let index = first; index < last; index += 1) {
     const low = Math.max(from, standards[index] ?? 0);
     const high = Math.min(to, standards[index + 1] ?? 0);
-    const width = high - low;
-    if (!(width > 0)) continue;
-    for (const { place, weight } of GAUSS) {
-      const standard = (low + high) / 2 + (place * width) / 2;
-      sum += (weight * width * profitOf(standard) * Math.exp(-0.5 * standard * standard)) / ROOT_TWO_PI;
-    }
+    if (low < high) sum += normalWeighted(profitOf, low, high);
   }
   return sum;
 }
