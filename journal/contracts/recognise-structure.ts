@@ -122,12 +122,8 @@ function placeLegs(legs: readonly StructureLeg[], sharesPerContract: number): Pl
 }
 
 function fitOf(row: StructureRow, { legs, strikes }: PlacedLegs): Fit {
-  const byKey = new Map(legs.map((leg) => [leg.key, leg]));
-  const pairs = row.legs.flatMap((pattern) => {
-    const leg = byKey.get(keyOf(pattern));
-    return leg === undefined ? [] : [{ pattern, leg }];
-  });
-  if (pairs.length !== row.legs.length || legs.length !== row.legs.length) return { kind: 'other-shape' };
+  const pairs = pairLegs(row.legs, legs) ?? (row.otherLegs === null ? null : pairLegs(row.otherLegs, legs));
+  if (pairs === null) return { kind: 'other-shape' };
   if (row.isEven && !hasEvenWings(strikes.map(Number))) return { kind: 'uneven' };
   const few = pairs.find(({ pattern }) => pattern.ratio === 'few')?.leg;
   const many = pairs.find(({ pattern }) => pattern.ratio === 'many')?.leg;
@@ -147,6 +143,21 @@ function fitOf(row: StructureRow, { legs, strikes }: PlacedLegs): Fit {
     return { kind: 'other-quantity', legIndex, quantity, expected: units * Number(wrong.pattern.ratio) };
   }
   return { kind: 'fits', units, ratio: null };
+}
+
+interface LegPair {
+  readonly pattern: PatternLeg;
+  readonly leg: PlacedLeg;
+}
+
+/** Each leg with its place in a pattern; null where one has none. */
+function pairLegs(pattern: readonly PatternLeg[], legs: readonly PlacedLeg[]): LegPair[] | null {
+  const byKey = new Map(legs.map((leg) => [leg.key, leg]));
+  const pairs = pattern.flatMap((each) => {
+    const leg = byKey.get(keyOf(each));
+    return leg === undefined ? [] : [{ pattern: each, leg }];
+  });
+  return pairs.length === pattern.length && legs.length === pattern.length ? pairs : null;
 }
 
 /** Whether the lowest and the highest gap between strikes are of one width. */

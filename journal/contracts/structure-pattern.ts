@@ -33,6 +33,8 @@ export interface StructureEnds {
 export interface StructureRow {
   readonly name: string;
   readonly legs: readonly PatternLeg[];
+  /** Other legs that go by the same name; it is never built with them. */
+  readonly otherLegs: readonly PatternLeg[] | null;
   /** Whether the outer gaps between strikes are of one width. */
   readonly isEven: boolean;
   /** How its strikes are said: all ascending, all descending, or the outermost two. */

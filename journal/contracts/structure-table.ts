@@ -19,7 +19,11 @@ function row<Name extends string>(
   name: Name,
   legs: readonly PatternLeg[],
   formula: Formula | null,
-  { isEven = false, saying = 'ascending' }: Partial<Pick<StructureRow, 'isEven' | 'saying'>> = {},
+  {
+    isEven = false,
+    saying = 'ascending',
+    otherLegs = null,
+  }: Partial<Omit<StructureRow, 'name' | 'legs' | 'ends'>> = {},
 ): StructureRow & { readonly name: Name } {
   const ends =
     formula === null
@@ -28,7 +32,7 @@ function row<Name extends string>(
           const [first = NaN, second = NaN, third = NaN, fourth = NaN] = terms.strikes;
           return formula([first, second, third, fourth], terms.cost, terms);
         };
-  return { name, legs, isEven, saying, ends };
+  return { name, legs, otherLegs, isEven, saying, ends };
 }
 
 const butterfly = (type: 'call' | 'put') => [buy(type, 0), sell(type, 1, { ratio: 2 }), buy(type, 2)];
@@ -290,10 +294,21 @@ export const structureTable = [
   row('short call calendar', reversed(calendar('call')), null),
   row('long put calendar', calendar('put'), null),
   row('short put calendar', reversed(calendar('put')), null),
-  row('long call diagonal', [buy('call', 0, { expiry: 1 }), sell('call', 1)], null),
-  row('short call diagonal', [sell('call', 0, { expiry: 1 }), buy('call', 1)], null),
-  row('long put diagonal', [sell('put', 0), buy('put', 1, { expiry: 1 })], null, { saying: 'descending' }),
-  row('short put diagonal', [buy('put', 0), sell('put', 1, { expiry: 1 })], null, { saying: 'descending' }),
+  // Usually the later leg is the one nearer to the money; with the strikes crossed the name is the same.
+  row('long call diagonal', [buy('call', 0, { expiry: 1 }), sell('call', 1)], null, {
+    otherLegs: [sell('call', 0), buy('call', 1, { expiry: 1 })],
+  }),
+  row('short call diagonal', [sell('call', 0, { expiry: 1 }), buy('call', 1)], null, {
+    otherLegs: [buy('call', 0), sell('call', 1, { expiry: 1 })],
+  }),
+  row('long put diagonal', [sell('put', 0), buy('put', 1, { expiry: 1 })], null, {
+    saying: 'descending',
+    otherLegs: [buy('put', 0, { expiry: 1 }), sell('put', 1)],
+  }),
+  row('short put diagonal', [buy('put', 0), sell('put', 1, { expiry: 1 })], null, {
+    saying: 'descending',
+    otherLegs: [sell('put', 0, { expiry: 1 }), buy('put', 1)],
+  }),
 ] as const;
 
 export type StructureName = (typeof structureTable)[number]['name'];

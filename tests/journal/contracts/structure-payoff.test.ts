@@ -1,8 +1,8 @@
 import { payoffAt } from '@/journal/contracts/expiry-payoff';
 import { type StructureLeg } from '@/journal/contracts/structure-leg';
-import { costToOpen, structurePayoff } from '@/journal/contracts/structure-payoff';
+import { type ContractTerms, costToOpen, structurePayoff } from '@/journal/contracts/structure-payoff';
 
-const terms = { premiumMultiplier: '100', deliverableShares: '100', deliverableCash: '0' };
+const terms: ContractTerms = { premiumMultiplier: '100', deliverableShares: '100', deliverableCash: '0' };
 const costs = { feePerContract: '0.65', feePerShare: '0' };
 const option = (
   side: 'buy' | 'sell',
@@ -58,7 +58,7 @@ describe('the pay-off of a structure', () => {
     expect(costToOpen(legs, terms, { feePerContract: '0.65', feePerShare: '0.005' }).toString()).toBe('9662.3');
   });
 
-  it.each<[string, readonly StructureLeg[], Partial<typeof terms>, string]>([
+  it.each<[string, readonly StructureLeg[], Partial<ContractTerms>, string]>([
     ['no legs', [], {}, 'legs-missing'],
     [
       'two expiries',
