@@ -1,4 +1,5 @@
 import { payoffAt } from '@/journal/contracts/expiry-payoff';
+import { type PlannedLeg } from '@/journal/contracts/planned-leg';
 import { type StructureLeg } from '@/journal/contracts/structure-leg';
 import { type ContractTerms, costToOpen, structurePayoff } from '@/journal/contracts/structure-payoff';
 
@@ -10,7 +11,7 @@ const option = (
   strikePrice: string,
   premium: string,
   quantity = 1,
-): StructureLeg => ({
+): PlannedLeg => ({
   id: `${side} ${type} ${strikePrice}`,
   side,
   type,
