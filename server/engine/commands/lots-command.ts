@@ -10,6 +10,10 @@ const instrumentSchema = z.discriminatedUnion('kind', [
     type: z.enum(['call', 'put']),
     strikePrice: z.string(),
     multiplier: z.string(),
+    /** Of an adjusted series: what one contract delivers. */
+    deliverable: z
+      .strictObject({ symbol: z.string().min(1), sharesPerContract: z.string(), cashPerContract: z.string() })
+      .optional(),
   }),
   z.strictObject({ kind: z.literal('stock'), symbol: z.string().min(1), multiplier: z.literal('1').default('1') }),
 ]);
@@ -29,12 +33,26 @@ const lotsCaseSchema = z.strictObject({
     }),
   ),
   method: z.enum(['fifo', 'lifo', 'average']),
+  /** Splits, symbol changes and other adjustments of what is held. */
+  changes: z
+    .array(
+      z.strictObject({
+        id: z.string().min(1),
+        changedAt: z.string(),
+        sequence: z.int().default(0),
+        from: instrumentSchema,
+        to: instrumentSchema,
+        oldQuantity: z.string(),
+        newQuantity: z.string(),
+      }),
+    )
+    .default([]),
 });
 
 /** Closed and open lots with the realised profit, all amounts as decimal texts. */
-export const lotsCommand = engineCommand(lotsCaseSchema, ({ fills, method }) =>
+export const lotsCommand = engineCommand(lotsCaseSchema, ({ fills, method, changes }) =>
   matchLots(
     fills.map((fill, index) => ({ ...fill, sequence: fill.sequence ?? index })),
-    { method },
+    { method, changes },
   ),
 );

@@ -185,6 +185,36 @@ describe('sessions', () => {
 });
 
 describe('lots', () => {
+  it('carries what is held through a two-for-one split', () => {
+    const stock = { kind: 'stock', symbol: 'XJKO' };
+    const trade = (id: string, kind: string, quantity: string, price: string, tradedAt: string) => ({
+      id,
+      kind,
+      instrument: stock,
+      quantity,
+      price,
+      tradedAt,
+    });
+    const lots = resultOf(lotsCommand, {
+      method: 'fifo',
+      fills: [
+        trade('1', 'buy', '100', '50', '2026-12-01T15:00:00.000Z'),
+        trade('2', 'sell', '200', '26', '2026-12-03T15:00:00.000Z'),
+      ],
+      changes: [
+        {
+          id: 'split',
+          changedAt: '2026-12-02T14:00:00.000Z',
+          from: stock,
+          to: stock,
+          oldQuantity: '1',
+          newQuantity: '2',
+        },
+      ],
+    });
+    expect(lots).toMatchObject({ realisedProfit: '200', open: [] });
+  });
+
   const instrument = { kind: 'stock', symbol: 'ZQXA' };
   const fills = [
     {
