@@ -99,7 +99,8 @@ function solveTotalDeviation(distance: number, share: number): number {
   const target = isLow ? share : 1 - share;
   let low = 0;
   let high = Infinity;
-  let deviation = isLow ? guessFromValue(distance, share) : guessFromMissing(distance, target);
+  const guess = isLow ? guessFromValue(distance, share) : guessFromMissing(distance, target);
+  let deviation = guess > 0 && guess < Infinity ? guess : 1;
   for (let step = 1; ; step += 1) {
     one[Term.LogMoneyness] = distance;
     one[Term.TotalDeviation] = deviation;
@@ -123,7 +124,8 @@ function solveTotalDeviation(distance: number, share: number): number {
     if (Math.abs(change) <= CLOSE_ENOUGH * deviation) return next;
     const isWithin = next > low && next < high;
     deviation = isWithin && step < MOST_HOUSEHOLDER_STEPS ? next : middle(low, high);
-    if (deviation === low || deviation === high) return deviation; // neighbouring doubles: the price cannot tell more
+    // Neighbouring doubles: the price cannot tell more.
+    if (!(low < deviation && deviation < high)) return deviation;
   }
 }
 
@@ -156,7 +158,7 @@ function guessFromMissing(distance: number, missing: number): number {
 
 /** Between two brackets: geometric once both are positive, since the answer spans many orders of magnitude. */
 function middle(low: number, high: number): number {
-  if (high === Infinity) return low * 2;
+  if (high === Infinity) return low * 2; // there is a low by then
   return low > 0 ? Math.sqrt(low) * Math.sqrt(high) : high / 16;
 }
 

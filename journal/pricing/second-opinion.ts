@@ -1,4 +1,5 @@
 import blackScholesPackage from 'black-scholes';
+import { DomainError } from '@/journal/errors/domain-error';
 import { type EuropeanOption, europeanOptionPrice } from '@/journal/pricing/european-option';
 
 export interface SecondOpinion {
@@ -23,7 +24,7 @@ const KNOWN_ACCURACY = 1e-9;
  * It knows one clock and no dividend yield: it gets the spot price less the dividends' worth, and the volatility per calendar
  * year that gives the same total deviation.
  * @param option see {@link EuropeanOption}; where no time or no variance is left, both sides have a closed answer and agree.
- * @throws {DomainError} as {@link europeanOptionPrice}.
+ * @throws {DomainError} as {@link europeanOptionPrice}; `second-opinion-missing` where the package has no number for an answer.
  */
 export function secondOpinion(option: EuropeanOption): SecondOpinion {
   const ours = europeanOptionPrice(option);
@@ -42,6 +43,7 @@ export function secondOpinion(option: EuropeanOption): SecondOpinion {
     rate,
     option.type,
   );
+  if (!Number.isFinite(price)) throw new DomainError('second-opinion-missing', { price, ours });
   const difference = price - ours;
   return { price, difference, tolerance, agrees: Math.abs(difference) <= tolerance };
 }

@@ -46,6 +46,12 @@ describe('second opinion', () => {
     expect(secondOpinion({ ...call, ...change }).agrees).toBe(true);
   });
 
+  it('throws second-opinion-missing where the other has no number', () => {
+    expect(() => secondOpinion({ ...call, years: 1e160, ratePerYear: -0.0018 })).toThrow(
+      expect.objectContaining({ code: 'second-opinion-missing' }),
+    );
+  });
+
   it('throws option-input-invalid as the engine does', () => {
     expect(() => secondOpinion({ ...call, spotPrice: NaN })).toThrow(
       expect.objectContaining({ code: 'option-input-invalid' }),
