@@ -5,24 +5,15 @@ import {
   optionColumns,
   valueColumns,
 } from '@/journal/pricing/european-columns';
-import { europeanOptionPrice, europeanOptionValue, type EuropeanOption } from '@/journal/pricing/european-option';
+import { europeanOptionPrice, europeanOptionValue } from '@/journal/pricing/european-option';
 import { columnsOf } from '@/tests/bench/column-options';
+import { plannedCall } from '@/tests/journal/pricing/planned-call';
 import { randomOption } from '@/tests/journal/pricing/random-option';
 
 fc.configureGlobal({ seed: 20261201 });
 
 /** More than one chunk of rows and a part of another. */
 const options = fc.sample(randomOption, 300);
-const plain: EuropeanOption = {
-  type: 'call',
-  spotPrice: 100,
-  strikePrice: 102,
-  dailyVolatility: 0.015,
-  sessions: 10,
-  years: 14 / 365,
-  ratePerYear: 0.04,
-  dividendYield: 0,
-};
 
 describe('European options in columns', () => {
   it('have price, Greeks and odds of the same options one by one, to the last digit', () => {
@@ -45,7 +36,11 @@ describe('European options in columns', () => {
   });
 
   it('throws option-input-invalid naming row, field and value of the first that is invalid', () => {
-    const columns = columnsOf([...options.slice(0, 200), { ...plain, sessions: -1 }, { ...plain, sessions: NaN }]);
+    const columns = columnsOf([
+      ...options.slice(0, 200),
+      { ...plannedCall, sessions: -1 },
+      { ...plannedCall, sessions: NaN },
+    ]);
     const refusal = expect.objectContaining({
       code: 'option-input-invalid',
       details: { row: 200, field: 'sessions', value: -1 },
@@ -55,7 +50,7 @@ describe('European options in columns', () => {
   });
 
   it('throws option-input-invalid for a direction that is neither call nor put', () => {
-    const columns = columnsOf([plain]);
+    const columns = columnsOf([plannedCall]);
     columns.direction[0] = 0;
     expect(() => europeanPriceColumns(columns, new Float64Array(1))).toThrow(
       expect.objectContaining({ code: 'option-input-invalid', details: { field: 'direction', value: 0 } }),
@@ -63,7 +58,7 @@ describe('European options in columns', () => {
   });
 
   it.each([-1, NaN, Infinity])('throws option-input-invalid for %p years to the next session', (years) => {
-    expect(() => europeanValueColumns(columnsOf([plain]), valueColumns(1), years)).toThrow(
+    expect(() => europeanValueColumns(columnsOf([plannedCall]), valueColumns(1), years)).toThrow(
       expect.objectContaining({
         code: 'option-input-invalid',
         details: { field: 'yearsPerNextSession', value: years },
@@ -72,7 +67,7 @@ describe('European options in columns', () => {
   });
 
   it('throws option-value-out-of-range where interest takes the strike out of the doubles', () => {
-    const columns = columnsOf([plain, { ...plain, type: 'put', years: 100, ratePerYear: -10 }]);
+    const columns = columnsOf([plannedCall, { ...plannedCall, type: 'put', years: 100, ratePerYear: -10 }]);
     const refusal = expect.objectContaining({ code: 'option-value-out-of-range', details: { row: 1 } });
     expect(() => europeanPriceColumns(columns, new Float64Array(2))).toThrow(refusal);
     expect(() => europeanValueColumns(columns, valueColumns(2), 1 / 365)).toThrow(refusal);
@@ -81,7 +76,7 @@ describe('European options in columns', () => {
   it('prices huge numbers whose sum leaves the doubles, though they do not', () => {
     const price = new Float64Array(1);
     europeanPriceColumns(
-      columnsOf([{ ...plain, spotPrice: 1.2e308, strikePrice: 1e308, years: 0, sessions: 0 }]),
+      columnsOf([{ ...plannedCall, spotPrice: 1.2e308, strikePrice: 1e308, years: 0, sessions: 0 }]),
       price,
     );
     expect(price[0]).toBe(1.2e308 - 1e308);

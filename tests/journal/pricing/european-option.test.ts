@@ -1,19 +1,10 @@
 import fc from 'fast-check';
 import { type EuropeanOption, europeanOptionPrice, europeanOptionValue } from '@/journal/pricing/european-option';
+import { plannedCall } from '@/tests/journal/pricing/planned-call';
 import { randomOption } from '@/tests/journal/pricing/random-option';
 
 fc.configureGlobal({ seed: 20261201 });
 
-const plannedCall: EuropeanOption = {
-  type: 'call',
-  spotPrice: 100,
-  strikePrice: 102,
-  dailyVolatility: 0.015,
-  sessions: 10,
-  years: 14 / 365,
-  ratePerYear: 0.04,
-  dividendYield: 0,
-};
 const plannedPut: EuropeanOption = { ...plannedCall, type: 'put' };
 
 /** Rounding of the larger present value, which no price can be free of in the money. */
