@@ -89,6 +89,7 @@ export function exponential(exponent: number): number {
  */
 export function exponentialLessOne(exponent: number): number {
   const x = exponent;
+  if (x === 0) return 0; // most stocks pay no yield
   const isSmall = x <= 1 / 64 && x >= -1 / 64;
   if (!isSmall) return exponential(x) - 1;
   return x + x * x * (1 / 2 + x * (1 / 6 + x * (1 / 24 + x * (1 / 120 + x * (1 / 720 + x * (1 / 5040))))));

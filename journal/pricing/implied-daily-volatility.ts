@@ -45,14 +45,10 @@ export function impliedDailyVolatility(question: ImpliedQuestion): ImpliedVolati
   const presentSpot = spotPrice + spotLoss;
   const presentStrike = strikePrice + strikeLoss;
   const logMoneyness = logRatio(spotPrice, strikePrice) + (interest - dividends);
-  if (!(presentSpot < Infinity && presentStrike < Infinity && Math.abs(logMoneyness) < Infinity))
-    throw new DomainError('option-value-out-of-range', {
-      presentSpot,
-      presentStrike,
-    });
-
   const sign = type === 'call' ? 1 : -1;
   const forwardValue = sign * (spotPrice - strikePrice + (spotLoss - strikeLoss));
+  if (!(presentSpot + presentStrike + Math.abs(forwardValue) + Math.abs(logMoneyness) < Infinity))
+    throw new DomainError('option-value-out-of-range', { presentSpot, presentStrike });
   const intrinsic = Math.max(forwardValue, 0);
   const most = type === 'call' ? presentSpot : presentStrike;
   if (sessions === 0) return { kind: 'none', bound: 'no-time-left', limit: intrinsic };
