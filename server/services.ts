@@ -89,6 +89,7 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
     seals,
     fills,
     scopes,
+    onBarsChanged,
     sessionStore: new SessionStore(dataSource, clock),
     handlers,
     close: async () => {

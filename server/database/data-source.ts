@@ -9,6 +9,7 @@ import { migrations } from '@/server/database/migrations/all-migrations';
 import { DeskEntity } from '@/server/desk/desk-entity';
 import { EntryEntity } from '@/server/entries/entry-entity';
 import { FillEntity } from '@/server/fills/fill-entity';
+import { OutcomeChangeEntity } from '@/server/outcomes/outcome-change-entity';
 import { OutcomeEntity } from '@/server/outcomes/outcome-entity';
 import { ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
 import { MembershipEntity } from '@/server/people/membership-entity';
@@ -54,6 +55,7 @@ export function createDataSource(url: string): DataSource {
       SealedContentEntity,
       FillEntity,
       OutcomeEntity,
+      OutcomeChangeEntity,
       ScoredOddsEntity,
     ],
   });

@@ -16,6 +16,7 @@ export const tableGrants = {
   sealed_content: ['SELECT', 'INSERT'],
   fill: ['SELECT', 'INSERT', 'DELETE'],
   outcome: ['SELECT', 'INSERT', 'UPDATE'],
+  outcome_change: ['SELECT', 'INSERT'],
   scored_odds: ['SELECT', 'INSERT', 'UPDATE'],
   migration: ['SELECT'],
 } as const;

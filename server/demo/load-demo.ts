@@ -68,6 +68,9 @@ export async function loadDemo({
     });
     for (const moment of momentsOf(markets, sessions, random)) await writer.write(moment);
     time = now;
+    // Each entry knows the bars up to its last fill; those since come now.
+    for (const { id } of markets)
+      await services.onBarsChanged(trader, { underlyingId: id, fromSessionDate: sessions[0]?.date ?? '', prices: [] });
     await writer.writeDrafts(markets, lastSession);
     return true;
   } finally {

@@ -3,6 +3,7 @@ import { toDecimal, toDecimalText } from '@/journal/money/decimal';
 import { type DeskScope } from '@/server/database/desk-scope';
 import { type EntryEntity } from '@/server/entries/entry-entity';
 import { FillStore } from '@/server/fills/fill-store';
+import { OutcomeChangeStore } from '@/server/outcomes/outcome-change-store';
 import { OutcomeEntity } from '@/server/outcomes/outcome-entity';
 import { namesOnDesk } from '@/server/people/people-names';
 import { sealedAtOf, SealStore } from '@/server/seals/seal-store';
@@ -72,6 +73,7 @@ export class EntryDescriber {
             },
       fills: fills.map(({ fill, ...noted }) => ({ ...fill, ...noted, cash: cash.get(fill.id) ?? '0' })),
       outcome: (outcome?.outcome ?? null) as Entry['outcome'], // as above
+      history: await new OutcomeChangeStore(scope).list(entry.id),
       lesson: entry.lesson,
       isOwn: entry.traderId === scope.actor.personId,
     };

@@ -13,10 +13,12 @@ import { NotFoundError } from '@/server/errors/not-found-error';
 import { fillProblemOf } from '@/server/fills/fill-problem';
 import { FillStore } from '@/server/fills/fill-store';
 import { refuseUnkeepable } from '@/server/fills/refuse-unkeepable';
+import { fillCause } from '@/server/outcomes/outcome-cause';
 import { type OutcomeService } from '@/server/outcomes/outcome-service';
 import { type Clock } from '@/server/runtime/clock';
 import { type Ids } from '@/server/runtime/ids';
 import { UnderlyingStore } from '@/server/underlyings/underlying-store';
+import { type OutcomeCause } from '@/shared/entries/outcome-history';
 import { type NewFill } from '@/shared/entries/fill-form';
 
 interface Dependencies {
@@ -80,7 +82,7 @@ export class FillService {
           addedAt,
         })),
       );
-      await this.settle(inner, entry);
+      await this.settle(inner, entry, fillCause('added', fill));
       await new AuditLog(inner, { ...this.dependencies, requestId }).note('fill-added', fill.id, {
         entryId,
         kind: fill.kind,
@@ -107,7 +109,7 @@ export class FillService {
         fills.filter(({ fill, madeBy }) => fill.id !== fillId && madeBy !== fillId).map(({ fill }) => fill),
       );
       await store.remove(entryId, fillId);
-      await this.settle(inner, entry);
+      await this.settle(inner, entry, fillCause('taken-out', target.fill));
       await new AuditLog(inner, { ...this.dependencies, requestId }).note('fill-removed', fillId, {
         entryId,
         fill: target.fill,
@@ -117,7 +119,7 @@ export class FillService {
   }
 
   /** State, dates and lateness follow from the fills; then the outcome is computed again. */
-  private async settle(scope: DeskScope, entry: EntryEntity): Promise<void> {
+  private async settle(scope: DeskScope, entry: EntryEntity, cause: OutcomeCause): Promise<void> {
     const fills = (await new FillStore(scope).list(entry.id)).map(({ fill }) => fill);
     const times = fills.map(({ tradedAt }) => tradedAt).sort();
     const [first] = times;
@@ -131,7 +133,7 @@ export class FillService {
       firstFillAt: first === undefined ? null : new Date(first),
       lastFillAt: last === undefined ? null : new Date(last),
     });
-    await this.dependencies.outcomes.recompute(scope, entry.id);
+    await this.dependencies.outcomes.recompute(scope, entry.id, cause);
   }
 
   private async refuseImpossible(

@@ -6,13 +6,17 @@ import { type DeskScope } from '@/server/database/desk-scope';
 import { EntryEntity } from '@/server/entries/entry-entity';
 import { EntryStore } from '@/server/entries/entry-store';
 import { FillStore } from '@/server/fills/fill-store';
+import { OutcomeChangeStore } from '@/server/outcomes/outcome-change-store';
+import { pricesCause } from '@/server/outcomes/outcome-cause';
 import { OutcomeEntity } from '@/server/outcomes/outcome-entity';
 import { ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
 import { BarStore } from '@/server/prices/bar-store';
+import { type BarsChange } from '@/server/prices/bars-changed';
 import { type Clock } from '@/server/runtime/clock';
 import { type Ids } from '@/server/runtime/ids';
 import { sealedAtOf, SealStore, type StoredSeal } from '@/server/seals/seal-store';
 import { type Bar } from '@/shared/underlyings/underlying';
+import { type OutcomeCause } from '@/shared/entries/outcome-history';
 import { oddsStatement } from '@/shared/entries/odds-statement';
 
 /** A hold and what follows its expiry fits in this many sessions many times over. */
@@ -23,7 +27,7 @@ export class OutcomeService {
   constructor(private readonly dependencies: { readonly clock: Clock; readonly ids: Ids }) {}
 
   /** Every sealed entry on an underlying whose story the new bars go on telling. */
-  async onBarsChanged(scope: DeskScope, underlyingId: string, fromSessionDate: string): Promise<void> {
+  async onBarsChanged(scope: DeskScope, { underlyingId, fromSessionDate, prices }: BarsChange): Promise<void> {
     const entries = await new EntryStore(scope).listSealedOn(underlyingId);
     const ids = entries
       .filter(({ expirySessionDate }) => expirySessionDate === null || expirySessionDate >= fromSessionDate)
@@ -35,16 +39,24 @@ export class OutcomeService {
       const touched: EntryEntity[] = [];
       for (const id of ids) touched.push(await new EntryStore(inner).hold(id));
       const bars = await new BarStore(inner).newest(underlyingId, BARS);
-      for (const entry of touched) await this.recomputeWith(inner, entry, bars);
+      for (const entry of touched)
+        await this.recomputeWith(inner, entry, bars, ({ content: { input } }) =>
+          pricesCause(prices, { input, expirySessionDate: entry.expirySessionDate }),
+        );
     });
   }
 
-  async recompute(scope: DeskScope, entryId: string): Promise<void> {
+  async recompute(scope: DeskScope, entryId: string, cause: OutcomeCause): Promise<void> {
     const entry = await scope.repository(EntryEntity).get(entryId);
-    await this.recomputeWith(scope, entry, await new BarStore(scope).newest(entry.underlyingId, BARS));
+    await this.recomputeWith(scope, entry, await new BarStore(scope).newest(entry.underlyingId, BARS), () => cause);
   }
 
-  private async recomputeWith(scope: DeskScope, entry: EntryEntity, bars: readonly Bar[]): Promise<void> {
+  private async recomputeWith(
+    scope: DeskScope,
+    entry: EntryEntity,
+    bars: readonly Bar[],
+    causeFor: (seal: StoredSeal) => OutcomeCause,
+  ): Promise<void> {
     const seal = await new SealStore(scope).findByEntry(entry.id);
     if (seal === null) return;
     const { input, forecast } = seal.content;
@@ -53,18 +65,27 @@ export class OutcomeService {
     const marks = new Map(
       stored.map(({ fill, underlyingPrice, midPrice }) => [fill.id, { underlyingPrice, midPrice }]),
     );
-    const barsSince = bars
-      .filter((bar) => (usOptionsCalendar.sessionOn(bar.sessionDate)?.closesAt ?? '') > input.spot.at)
-      .map(outcomeBar);
+    const now = this.dependencies.clock.now();
+    const barsSince = bars.filter((bar) => isBetween(bar, input.spot.at, now.toISOString())).map(outcomeBar);
     const outcome = resolveEntry(
       { input, forecast, fills, barsSince, marks, sealedAt: sealedAtOf(seal.link) },
       usOptionsCalendar,
     );
+    const before = await scope.repository(OutcomeEntity).findOne({ entryId: entry.id });
+    await new OutcomeChangeStore(scope).keep({
+      id: this.dependencies.ids.next(),
+      entryId: entry.id,
+      input,
+      before: before?.outcome ?? null,
+      after: outcome,
+      cause: causeFor(seal),
+      at: now,
+    });
     await this.store(scope, entry, seal, outcome);
     const landed = outcome.move?.inSigmas ?? null;
-    const now = outcome.moveSoFar?.inSigmas ?? null;
+    const soFar = outcome.moveSoFar?.inSigmas ?? null;
     await new EntryStore(scope).note(entry.id, {
-      strip: entry.strip === null ? null : { ...entry.strip, landed, now },
+      strip: entry.strip === null ? null : { ...entry.strip, landed, now: soFar },
       realisedProfit: outcome.profit?.realised ?? null,
     });
   }
@@ -93,6 +114,12 @@ export class OutcomeService {
       { key: ['desk_id', 'entry_id', 'odds_key'], overwrite: ['happened', 'is_late_seal'] },
     );
   }
+}
+
+/** Whether a bar's session closed after the one instant and by the other. */
+function isBetween({ sessionDate }: Bar, after: string, by: string): boolean {
+  const closesAt = usOptionsCalendar.sessionOn(sessionDate)?.closesAt;
+  return closesAt !== undefined && closesAt > after && closesAt <= by;
 }
 
 function outcomeBar({ sessionDate, open, close, high, low, settlement }: Bar): OutcomeBar {

@@ -3,7 +3,7 @@ import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
 import { type DeskScope } from '@/server/database/desk-scope';
 import { InputError } from '@/server/errors/input-error';
 import { BarStore } from '@/server/prices/bar-store';
-import { type OnBarsChanged } from '@/server/prices/bars-changed';
+import { type OnBarsChanged, priceChanges } from '@/server/prices/bars-changed';
 import { rangeProblem, sessionProblem } from '@/server/prices/reading/read-bars';
 import { type Clock } from '@/server/runtime/clock';
 import { type Ids } from '@/server/runtime/ids';
@@ -34,11 +34,11 @@ export class BarService {
       settlement: plainOrNull(typed.settlement),
     };
     refuseImpossible(sessionDate, prices, now);
-    const { bar, isChanged } = await scope.inTransaction(async (inner) => {
+    const { bar, before } = await scope.inTransaction(async (inner) => {
       await new UnderlyingStore(inner).hold(underlyingId);
       const store = new BarStore(inner);
       const before = await store.find(underlyingId, sessionDate);
-      if (before !== null && isSameBar(before, prices)) return { bar: before, isChanged: false };
+      if (before !== null && isSameBar(before, prices)) return { bar: before, before };
       const row = {
         id: this.deps.ids.next(),
         underlyingId,
@@ -48,9 +48,11 @@ export class BarService {
         storedAt: now,
       } as const;
       await store.write([row], { withSettlement: true });
-      return { bar: { sessionDate, ...prices, source: row.source, storedAt: now.toISOString() }, isChanged: true };
+      return { bar: { sessionDate, ...prices, source: row.source, storedAt: now.toISOString() }, before };
     });
-    if (isChanged) await this.deps.onBarsChanged(scope, underlyingId, sessionDate);
+    const changes = priceChanges(sessionDate, before, bar);
+    if (changes.length > 0)
+      await this.deps.onBarsChanged(scope, { underlyingId, fromSessionDate: sessionDate, prices: changes });
     return bar;
   }
 }

@@ -6,7 +6,8 @@ import { ConflictError } from '@/server/errors/conflict-error';
 import { GoneError } from '@/server/errors/gone-error';
 import { InputError } from '@/server/errors/input-error';
 import { BarStore } from '@/server/prices/bar-store';
-import { type OnBarsChanged } from '@/server/prices/bars-changed';
+import { type BarsChange, type OnBarsChanged, priceChanges } from '@/server/prices/bars-changed';
+import { type BarPrices } from '@/server/prices/compare-bars';
 import { buildPreview, type PreviewedFile } from '@/server/prices/build-preview';
 import { readPriceFileFenced } from '@/server/prices/fenced-price-file';
 import { type PriceUploadEntity } from '@/server/prices/price-upload-entity';
@@ -95,9 +96,7 @@ export class PriceUploadService {
         result.preview,
       );
     }
-    if (result.firstSessionDate !== null) {
-      await this.deps.onBarsChanged(scope, row.underlyingId, result.firstSessionDate);
-    }
+    if (result.change !== null) await this.deps.onBarsChanged(scope, result.change);
     return result.preview;
   }
 
@@ -106,16 +105,16 @@ export class PriceUploadService {
     shown: PriceUploadEntity,
     read: PriceFileContent,
   ): Promise<
-    { kind: 'moved'; preview: PriceUpload } | { kind: 'stored'; preview: PriceUpload; firstSessionDate: string | null }
+    { kind: 'moved'; preview: PriceUpload } | { kind: 'stored'; preview: PriceUpload; change: BarsChange | null }
   > {
     const uploads = new PriceUploadStore(scope);
     const row = await uploads.get(shown.id, { locked: true });
-    if (row.state === 'committed') return { kind: 'stored', preview: row.preview, firstSessionDate: null };
+    if (row.state === 'committed') return { kind: 'stored', preview: row.preview, change: null };
     if (!isDeepStrictEqual(row.settledReading, shown.settledReading)) return { kind: 'moved', preview: row.preview };
     await new UnderlyingStore(scope).hold(row.underlyingId);
     // Storing answers no question: those that were open when the file was shown are open still.
     const content = { ...read, questions: row.preview.questions };
-    const { preview, compared } = await this.previewOf(scope, row, content);
+    const { preview, compared, stored } = await this.previewOf(scope, row, content);
     if (!preview.canCommit) {
       throw new ConflictError(
         'step-out-of-order',
@@ -130,10 +129,11 @@ export class PriceUploadService {
       return { kind: 'moved', preview };
     }
     const storedAt = this.deps.clock.now();
+    const { underlyingId } = row;
     await new BarStore(scope).write(
       compared.writes.map(({ sessionDate, prices }) => ({
         id: this.deps.ids.next(),
-        underlyingId: row.underlyingId,
+        underlyingId,
         sessionDate,
         ...prices,
         settlement: null,
@@ -144,7 +144,15 @@ export class PriceUploadService {
     );
     const committed: PriceUpload = { ...preview, state: 'committed', canCommit: false };
     await uploads.update(row.id, { state: 'committed', content: null, preview: committed });
-    return { kind: 'stored', preview: committed, firstSessionDate: compared.writes[0]?.sessionDate ?? null };
+    const [first] = compared.writes;
+    const prices = compared.writes.flatMap((write) =>
+      priceChanges(write.sessionDate, stored.get(write.sessionDate) ?? null, write.prices),
+    );
+    return {
+      kind: 'stored',
+      preview: committed,
+      change: first === undefined ? null : { underlyingId, fromSessionDate: first.sessionDate, prices },
+    };
   }
 
   private async bytesOf(store: PriceUploadStore, { id, uploadedAt }: PriceUploadEntity): Promise<Buffer> {
@@ -155,10 +163,14 @@ export class PriceUploadService {
     return bytes;
   }
 
-  private async previewOf(scope: DeskScope, upload: StoredUpload, content: PriceFileContent): Promise<PreviewedFile> {
+  private async previewOf(
+    scope: DeskScope,
+    upload: StoredUpload,
+    content: PriceFileContent,
+  ): Promise<PreviewedFile & { readonly stored: ReadonlyMap<string, BarPrices> }> {
     const stored = await new BarStore(scope).pricesByDate(upload.underlyingId);
     const { id, underlyingId, fileName } = upload;
-    return buildPreview({ upload: { id, underlyingId, fileName }, content, stored });
+    return { ...buildPreview({ upload: { id, underlyingId, fileName }, content, stored }), stored };
   }
 
   private async read(scope: DeskScope, { upload, bytes, wanted, shown }: ReadingRequest): Promise<PriceFileContent> {

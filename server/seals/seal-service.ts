@@ -87,7 +87,7 @@ export class SealService {
       await new AuditLog(inner, { clock, ids, requestId }).note('entry-sealed', entryId, {
         engineVersion: forecast.engineVersion,
       });
-      await outcomes.recompute(inner, entryId);
+      await outcomes.recompute(inner, entryId, { kind: 'seal' });
       return entries.getOwn(entryId);
     });
   }

@@ -9,6 +9,7 @@ import {
 } from '@/shared/contract/fields';
 import { draftPlanSchema } from '@/shared/entries/draft-plan';
 import { forecastInputSchema, forecastSchema } from '@/shared/entries/forecast-schema';
+import { outcomeStepSchema } from '@/shared/entries/outcome-history';
 import { entryOutcomeSchema } from '@/shared/entries/outcome-schema';
 
 export const entryStates = ['draft', 'sealed', 'open', 'closed', 'reviewed', 'abandoned'] as const;
@@ -112,6 +113,8 @@ export const entrySchema = z.strictObject({
     .nullable(),
   fills: z.array(fillSchema),
   outcome: entryOutcomeSchema.nullable(),
+  /** How the outcome came to say what it says, oldest first. */
+  history: z.array(outcomeStepSchema),
   lesson: z.string(),
   /** True when the reader may change it. */
   isOwn: z.boolean(),

@@ -22,6 +22,7 @@ import { KeepAuditEventFromDelete } from '@/server/database/migrations/0021-keep
 import { KeepSealedContentFromUpdate } from '@/server/database/migrations/0022-keep-sealed-content-from-update';
 import { TieSharesToTheirExercise } from '@/server/database/migrations/0023-tie-shares-to-their-exercise';
 import { NotePricesBesideFills } from '@/server/database/migrations/0024-note-prices-beside-fills';
+import { CreateOutcomeChange } from '@/server/database/migrations/0030-create-outcome-change';
 
 /** In the order they are applied; a new one goes to the end. */
 export const migrations = [
@@ -49,4 +50,5 @@ export const migrations = [
   KeepSealedContentFromUpdate,
   TieSharesToTheirExercise,
   NotePricesBesideFills,
+  CreateOutcomeChange,
 ];

@@ -105,6 +105,7 @@ export const sampleDraft = (legs: DraftLeg[], row: Partial<EntryRow> = {}): Entr
   sealed: null,
   fills: [],
   outcome: null,
+  history: [],
   lesson: '',
   isOwn: true,
 });

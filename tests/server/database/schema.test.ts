@@ -256,6 +256,7 @@ const breaches: Readonly<Record<string, Row>> = {
   'sealed_forecast.ck_sealed_forecast_sequence': { sequence: 0 },
   'fill.ck_fill_kind': { kind: 'gift' },
   'fill.ck_fill_amounts': { quantity: '0' },
+  'outcome_change.ck_outcome_change_why': { why: 'whim' },
   'scored_odds.ck_scored_odds_probability': { probability: 1.000001 },
 };
 
@@ -329,18 +330,21 @@ describe('the application’s account', () => {
     expect(Object.keys(tableGrants).sort()).toEqual(tables().sort());
   });
 
-  it.each(['sealed_forecast', 'sealed_content', 'audit_event'])('can only add to %s', async (table) => {
-    const refused = [
-      `UPDATE \`${table}\` SET id = id`,
-      `DELETE FROM \`${table}\``,
-      `REPLACE INTO \`${table}\` (id) VALUES ('x')`,
-      `INSERT INTO \`${table}\` (id) VALUES ('x') ON DUPLICATE KEY UPDATE id = 'y'`,
-      `TRUNCATE TABLE \`${table}\``,
-      `DROP TABLE \`${table}\``,
-      `ALTER TABLE \`${table}\` ADD COLUMN x INT`,
-    ];
-    for (const statement of refused) expect([statement, await refusalOf(statement)]).toEqual([statement, 1142]);
-  });
+  it.each(['sealed_forecast', 'sealed_content', 'audit_event', 'outcome_change'])(
+    'can only add to %s',
+    async (table) => {
+      const refused = [
+        `UPDATE \`${table}\` SET id = id`,
+        `DELETE FROM \`${table}\``,
+        `REPLACE INTO \`${table}\` (id) VALUES ('x')`,
+        `INSERT INTO \`${table}\` (id) VALUES ('x') ON DUPLICATE KEY UPDATE id = 'y'`,
+        `TRUNCATE TABLE \`${table}\``,
+        `DROP TABLE \`${table}\``,
+        `ALTER TABLE \`${table}\` ADD COLUMN x INT`,
+      ];
+      for (const statement of refused) expect([statement, await refusalOf(statement)]).toEqual([statement, 1142]);
+    },
+  );
 
   it('cannot make tables, triggers or accounts, nor read other databases', async () => {
     expect(await refusalOf('CREATE TABLE x (id INT)')).toBe(1142);

@@ -1,4 +1,5 @@
 import { type Entry } from '@/shared/entries/entry';
+import { comeBack, entryOf } from '@/tests/server/support/come-back';
 import {
   addDraft,
   addSealed,
@@ -10,7 +11,7 @@ import {
   option,
   putBar,
 } from '@/tests/server/support/journal';
-import { callsOf, cookieOf, startTestApp, type TestApp, type TestPerson } from '@/tests/server/support/test-app';
+import { startTestApp, type TestApp, type TestPerson } from '@/tests/server/support/test-app';
 
 jest.setTimeout(60_000);
 
@@ -25,21 +26,11 @@ afterAll(async () => {
 });
 beforeEach(() => app.clock.set('2026-12-09T22:00:00.000Z'));
 
-/** The person signed in again, since sessions end while the days pass. */
-async function comeBack(person: TestPerson, instant: string): Promise<TestPerson> {
-  app.clock.set(instant);
-  const { email, password } = person;
-  const answer = await app.anonymous.post('/account/sign-in').send({ email, password }).expect(200);
-  const cookie = cookieOf(answer.get('Set-Cookie'));
-  return { ...person, cookie, ...callsOf(app.app, cookie) };
-}
 const link = (mentor: TestPerson, trader: TestPerson, revokedAt: string | null = null) =>
   app.dataSource.query(
     'INSERT INTO mentorship (id, desk_id, mentor_id, trader_id, accepted_at, revoked_at) VALUES (UUID(), ?, ?, ?, NOW(6), ?)',
     [trader.deskId, mentor.id, trader.id, revokedAt],
   );
-const entryOf = async (person: TestPerson, id: string): Promise<Entry> =>
-  (await person.get(`/entries/${id}`).expect(200)).body;
 
 describe('an outcome', () => {
   it('appears as the bars come, waits for the last one, and is scored then', async () => {
@@ -47,7 +38,7 @@ describe('an outcome', () => {
     const underlyingId = await addUnderlying(before);
     const id = await addSealed(before, completePlan(underlyingId, { stopPrice: '97' }));
     expect(await entryOf(before, id)).toMatchObject({ outcome: { isComplete: false, move: null } });
-    const trader = await comeBack(before, '2026-12-18T22:00:00.000Z');
+    const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
     for (const [index, date] of sessions.slice(0, -1).entries())
       await putBar(trader, { underlyingId, date, close: String(98 + index / 10) });
     const waiting = await entryOf(trader, id);
@@ -90,7 +81,7 @@ describe('an outcome', () => {
     const before = await app.person({ role: 'trader' });
     const underlyingId = await addUnderlying(before, { fields: { ...indexFields, settlementTime: 'am' } });
     const id = await addSealed(before, completePlan(underlyingId));
-    const trader = await comeBack(before, '2026-12-18T22:00:00.000Z');
+    const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
     for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
     const waitsFor = `the settlement value of ${expiry}`;
     expect((await entryOf(trader, id)).outcome).toMatchObject({
@@ -111,7 +102,7 @@ describe('an outcome', () => {
     const before = await app.person({ role: 'trader' });
     const underlyingId = await addUnderlying(before);
     const id = await addSealed(before, completePlan(underlyingId));
-    const trader = await comeBack(before, '2026-12-18T22:00:00.000Z');
+    const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
     for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
     const inTheMoney = async () =>
       (await entryOf(trader, id)).outcome?.odds
@@ -128,7 +119,7 @@ describe('an outcome', () => {
     const id = await addSealed(before, completePlan(underlyingId));
     const early = fill('sell', option('put', '97'), { price: '0.78', tradedAt: '2026-12-09T20:00:00.000Z' });
     await before.post(`/entries/${id}/fills`).send(early).expect(201);
-    const trader = await comeBack(before, '2026-12-18T22:00:00.000Z');
+    const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
     for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
     const { body } = await trader.get('/scores').expect(200);
     expect(body).toMatchObject({ count: 0 });
@@ -140,7 +131,7 @@ describe('an outcome', () => {
     const underlyingId = await addUnderlying(before);
     const id = await addSealed(before, completePlan(underlyingId));
     await before.post(`/entries/${id}/abandon`).set('If-Match', '2').expect(200);
-    const trader = await comeBack(before, '2026-12-18T22:00:00.000Z');
+    const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
     for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
     expect((await trader.get('/scores').expect(200)).body.count).toBeGreaterThan(0);
   });

@@ -192,6 +192,15 @@ export const sampleRows: Readonly<Record<string, (ids: DeskIds) => Row>> = {
     is_complete: 0,
     computed_at: instant,
   }),
+  outcome_change: ({ deskId, entryId }) => ({
+    id: randomUUID(),
+    desk_id: deskId,
+    entry_id: entryId,
+    why: 'bar',
+    cause: '{}',
+    changes: '[]',
+    at: instant,
+  }),
   scored_odds: ({ deskId, personId, entryId }) => ({
     id: randomUUID(),
     desk_id: deskId,

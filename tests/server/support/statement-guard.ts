@@ -13,6 +13,7 @@ const deskTables = [
   'sealed_content',
   'fill',
   'outcome',
+  'outcome_change',
   'scored_odds',
 ];
 
