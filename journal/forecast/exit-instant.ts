@@ -1,8 +1,8 @@
 import { type ExchangeCalendar, type ExchangeSession, nextSession } from '@/journal/sessions/exchange-calendar';
-import { instantMilliseconds, instantOfMilliseconds } from '@/journal/sessions/instant';
+import { instantMilliseconds } from '@/journal/sessions/instant';
 import {
   type ClockSettings,
-  FULL_SESSION_MINUTES,
+  instantWithRemaining,
   sessionEndingAfter,
   sessionsBetween,
 } from '@/journal/sessions/session-clock';
@@ -27,17 +27,13 @@ export function exitInstant(question: {
   let left = question.sessions;
   for (;;) {
     const inSession = sessionsBetween({ calendar, from: start, to: session.closesAt, settings });
-    if (left <= inSession + ROUNDING) return { at: within(session, inSession - left, settings), session };
+    if (left <= inSession + ROUNDING) {
+      const remaining = inSession - left;
+      const at = remaining <= ROUNDING ? session.closesAt : instantWithRemaining(session, remaining, settings);
+      return { at, session };
+    }
     left -= inSession;
     start = session.closesAt;
     session = nextSession(calendar, session.date);
   }
-}
-
-/** The instant at which this much of a session's variance is still to come. */
-function within(session: ExchangeSession, remaining: number, { overnightShare }: ClockSettings): string {
-  if (remaining <= ROUNDING) return session.closesAt;
-  const minutesLeft = (remaining / (1 - overnightShare)) * FULL_SESSION_MINUTES;
-  const milliseconds = instantMilliseconds(session.closesAt) - minutesLeft * 60_000;
-  return instantOfMilliseconds(Math.max(instantMilliseconds(session.opensAt), Math.round(milliseconds)));
 }

@@ -86,6 +86,15 @@ export function countSessions(
 }
 
 /**
+ * Sessions of a calendar year: what a daily volatility is annualised by when the count matters (252 is a display convention).
+ * @param year whole, within the calendar.
+ * @throws {DomainError} `outside-calendar`, `session-date-invalid`.
+ */
+export function sessionsInYear(calendar: ExchangeCalendar, year: number): number {
+  return sessionsInRange(calendar, { from: dateOf(year, 1, 1), through: dateOf(year, 12, 31) }).length;
+}
+
+/**
  * Standard monthly expiration: the third Friday, or the session before it when that Friday is closed.
  * @param question.month 1 to 12.
  * @see exchange practice for US equity options since February 2015.

@@ -21,8 +21,13 @@ export function dayNumber(date: SessionDate): number {
   return Date.parse(`${date}T00:00:00Z`) / MILLISECONDS_A_DAY;
 }
 
-/** The date of a day number. */
+const FIRST_DAY = Date.parse('0000-01-01T00:00:00Z') / MILLISECONDS_A_DAY;
+const LAST_DAY = Date.parse('9999-12-31T00:00:00Z') / MILLISECONDS_A_DAY;
+
+/** The date of a day number, years 0 to 9999. @throws {DomainError} `session-date-invalid` with the day. */
 export function dateOfDay(day: number): SessionDate {
+  const isValid = Number.isInteger(day) && day >= FIRST_DAY && day <= LAST_DAY;
+  if (!isValid) throw new DomainError('session-date-invalid', { day });
   return new Date(day * MILLISECONDS_A_DAY).toISOString().slice(0, 10);
 }
 
@@ -31,7 +36,7 @@ export function weekdayOfDay(day: number): number {
   return (((day + 4) % 7) + 7) % 7; // 1970-01-01 was a Thursday
 }
 
-/** A date some calendar days later, earlier when negative. */
+/** A date some calendar days later, earlier when negative. @throws {DomainError} `session-date-invalid`. */
 export function addDays(date: SessionDate, days: number): SessionDate {
   return dateOfDay(dayNumber(date) + days);
 }

@@ -25,7 +25,10 @@ export const usOptionsCalendar: ExchangeCalendar = {
     sessions.set(date, session);
     return session;
   },
-  closureReason: (date) => (isWeekend(date) ? 'weekend' : (holidaysOf(date).closures.get(date) ?? null)),
+  closureReason: (date) => {
+    const { closures } = holidaysOf(date);
+    return isWeekend(date) ? 'weekend' : (closures.get(date) ?? null);
+  },
 };
 
 function makeSession(date: SessionDate): ExchangeSession | null {
