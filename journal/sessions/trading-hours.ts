@@ -1,8 +1,8 @@
-import { addDays, type SessionDate } from '@/journal/sessions/session-date';
+import { Temporal } from 'temporal-polyfill';
 import { type ExchangeCalendar, type ExchangeSession } from '@/journal/sessions/exchange-calendar';
 import { exchangeDateAt } from '@/journal/sessions/exchange-date';
 import { instantMilliseconds } from '@/journal/sessions/instant';
-import { Temporal } from 'temporal-polyfill';
+import { addDays, type SessionDate } from '@/journal/sessions/session-date';
 
 /** A stretch of trading of one session, in the exchange's time, 'HH:MM'; its open belongs to it, its close does not. */
 export interface TradingSegment {
