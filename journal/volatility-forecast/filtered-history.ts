@@ -30,8 +30,12 @@ export function filteredHistory(question: {
     filtered.push(((sums[at + sessions] ?? 0) - (sums[at] ?? 0)) / Math.sqrt(totalVariance(at)));
   }
   if (filtered.length < 21) throw new DomainError('too-few-returns', { required: from + sessions + 20, received: now });
+  filtered.sort((left, right) => left - right);
   const deviation = Math.sqrt(totalVariance(now));
-  const atoms = Array.from({ length: ATOMS }, (_, index) => deviation * quantile(filtered, (index + 0.5) / ATOMS));
+  const atoms = Array.from(
+    { length: ATOMS },
+    (_, index) => deviation * (filtered[Math.floor(((index + 0.5) / ATOMS) * filtered.length)] ?? 0),
+  );
   const mean = atoms.reduce((sum, value) => sum + value / ATOMS, 0);
   const spread = Math.sqrt(atoms.reduce((sum, value) => sum + (value - mean) ** 2 / ATOMS, 0));
   const middle = (quantile(atoms, 0.75) - quantile(atoms, 0.25)) / 1.34;

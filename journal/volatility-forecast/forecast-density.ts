@@ -88,12 +88,15 @@ export function studentForecast({
   function studentQuantile(probability: number): number {
     if (!(probability > 0 && probability < 1)) throw new DomainError('probability-out-of-range', { probability });
     const tail = Math.min(probability, 1 - probability);
+    // Bounds that close in on the answer: bisection from the ends of the doubles would take too many steps.
+    let least = normalQuantile(tail) - 1;
+    while (studentCumulative(least, degreesOfFreedom) > tail) least *= 2;
     const distance = searchQuantile({
       probability: tail,
       cumulative: (z) => studentCumulative(z, degreesOfFreedom),
       density: (z) => Math.exp(logDensityOf(z)),
       start: normalQuantile(tail),
-      least: -1e160,
+      least,
       most: 0,
     });
     return probability < 0.5 ? distance : 0 - distance;
