@@ -1,6 +1,6 @@
 import { View } from 'react-native';
 import { Chip } from '@/components/ui/chip';
-import { formatDate, formatMoney } from '@/components/ui/number-format';
+import { formatDate, formatInstant, formatMoney } from '@/components/ui/number-format';
 import { SignedAmount } from '@/components/ui/signed-amount';
 import { StateBerry } from '@/components/ui/state-berry';
 import { Txt } from '@/components/ui/text';
@@ -25,6 +25,9 @@ export function EntryHead({ entry }: { entry: SealedEntry }) {
         </View>
         <Txt size="row" colour="inkSoft">
           {[period(entry), row.trader.displayName].join(' · ')}
+        </Txt>
+        <Txt size="note" colour="inkSoft">
+          {sealWords(entry)}
         </Txt>
       </View>
       {profit === null ? null : (
@@ -54,6 +57,13 @@ function ordinal(value: number): string {
   const tens = value % 100;
   const ending = tens >= 11 && tens <= 13 ? 'th' : (['th', 'st', 'nd', 'rd'][value % 10] ?? 'th');
   return `${value}${ending}`;
+}
+
+/** When it was sealed, against the first fill. */
+function sealWords({ sealed: { receipt }, fills }: SealedEntry): string {
+  const at = `Sealed ${formatInstant(receipt.sealedAt, 'America/New_York', 'withYear')} New York`;
+  if (fills.length === 0) return at;
+  return `${at}, ${receipt.isLate ? 'after' : 'before'} the first of ${fills.length} ${fills.length === 1 ? 'fill' : 'fills'}`;
 }
 
 function period({ row, sealed }: SealedEntry): string {

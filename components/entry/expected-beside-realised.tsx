@@ -1,9 +1,9 @@
+import { anchorOf } from '@/components/entry/entry-sections';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { placeInForecast } from '@/components/entry/entry-head';
 import { Card } from '@/components/ui/card';
 import { formatMoney, formatPercent, formatSigma } from '@/components/ui/number-format';
 import { DataTable } from '@/components/ui/table';
-import { Txt } from '@/components/ui/text';
 
 interface Line {
   readonly what: string;
@@ -16,7 +16,7 @@ interface Line {
 export function ExpectedBesideRealised({ entry }: { entry: SealedEntry }) {
   const lines = linesOf(entry);
   return (
-    <Card title="Expected beside realised">
+    <Card anchor={anchorOf('result')} title="Expected beside realised">
       <DataTable
         caption="Expected beside realised"
         columns={[
@@ -30,9 +30,6 @@ export function ExpectedBesideRealised({ entry }: { entry: SealedEntry }) {
           note: line.note,
         }))}
       />
-      <Txt size="note" colour="inkSoft">
-        What one trade can show: little. It counts as one among many in Scores.
-      </Txt>
     </Card>
   );
 }
@@ -45,10 +42,6 @@ function linesOf({ sealed, outcome, row }: SealedEntry): Line[] {
   const profit = outcome?.profit ?? null;
   const distribution = forecast.atExit ?? forecast.atExpiry;
   const { currency } = row.underlying;
-  const ratioRange =
-    volatility === null || volatility.ratioLow === null || volatility.ratioHigh === null
-      ? ''
-      : `; chance alone allows ${volatility.ratioLow.toFixed(2)} to ${volatility.ratioHigh.toFixed(2)}`;
   return [
     {
       what: `Move over ${Number((move?.sessions ?? forecast.sessions.holding).toFixed(2))} sessions`,
@@ -57,13 +50,13 @@ function linesOf({ sealed, outcome, row }: SealedEntry): Line[] {
       note:
         move === null
           ? 'no bar yet'
-          : `${formatSigma(move.inSigmas)}, ${Math.abs(move.inSigmas) <= 1 ? 'inside 1σ' : `beyond ${Math.floor(Math.abs(move.inSigmas))}σ`}; ${placeInForecast(move.percentile, move.percentile)}`,
+          : `${formatSigma(move.inSigmas)}, ${Math.abs(move.inSigmas) <= 1 ? 'inside 1σ' : `beyond ${Math.floor(Math.abs(move.inSigmas))}σ`}; ${placeOf(move)}`,
     },
     {
       what: 'Volatility a session',
       expected: formatPercent(input.volatility.base, 2),
       realised: volatility === null ? '–' : formatPercent(volatility.dailyVolatility, 2),
-      note: volatility === null ? 'needs a bar after the seal' : `ratio ${volatility.ratio.toFixed(2)}${ratioRange}`,
+      note: volatility === null ? 'needs a bar after the seal' : volatilityWords(volatility),
     },
     {
       what: `Profit, ${currency}`,
@@ -75,6 +68,12 @@ function linesOf({ sealed, outcome, row }: SealedEntry): Line[] {
           : !profit.isFinal || profit.percentileHigh === null
             ? 'position still open'
             : placeInForecast(profit.percentileLow ?? 0, profit.percentileHigh),
+    },
+    {
+      what: `Mean of the worst 5%, ${currency}`,
+      expected: formatMoney(distribution.expectedShortfall, { sign: true }),
+      realised: '–',
+      note: 'expected shortfall of the sealed plan; one trade cannot test it',
     },
     {
       what: `Fees, ${currency}`,
@@ -91,4 +90,31 @@ function linesOf({ sealed, outcome, row }: SealedEntry): Line[] {
       note: outcome?.move == null ? 'still running' : '',
     },
   ];
+}
+
+type Outcome = NonNullable<SealedEntry['outcome']>;
+
+/** The place in the forecast; also in Student's distribution where counting the error of the estimate moves it. */
+function placeOf({ percentile, studentPercentile }: NonNullable<Outcome['move']>): string {
+  const place = placeInForecast(percentile, percentile);
+  if (studentPercentile === null || Math.round(studentPercentile * 100) === Math.round(percentile * 100)) return place;
+  return `${place}, ${placeInForecast(studentPercentile, studentPercentile).replace(' in its forecast', '')} with the error of its volatility`;
+}
+
+function volatilityWords({
+  low,
+  high,
+  ratio,
+  ratioLow,
+  ratioHigh,
+}: NonNullable<Outcome['realisedVolatility']>): string {
+  const interval =
+    low === null || high === null
+      ? ''
+      : `what stood behind it: ${formatPercent(low, 2)} to ${formatPercent(high, 2)} (95%); `;
+  const chance =
+    ratioLow === null || ratioHigh === null
+      ? ''
+      : `; chance alone allows ${ratioLow.toFixed(2)} to ${ratioHigh.toFixed(2)}`;
+  return `${interval}ratio ${ratio.toFixed(2)}${chance}`;
 }

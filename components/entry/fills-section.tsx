@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import { AddFillDialog } from '@/components/entry/add-fill-dialog';
 import { FillList } from '@/components/entry/fill-list';
 import { contractWords, fillActs } from '@/components/entry/fill-words';
+import { anchorOf } from '@/components/entry/entry-sections';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
@@ -38,6 +39,7 @@ export function FillsSection({ entry }: { entry: SealedEntry }) {
     ) : null;
   return (
     <Card
+      anchor={anchorOf('fills')}
       title="Fills"
       subtitle={
         fills.length === 0 ? 'None yet' : `${fills.length} ${fills.length === 1 ? 'fill' : 'fills'}, in ${currency}`

@@ -1,4 +1,5 @@
 import { LandingBell, type LandingMark } from '@/components/charts/landing-bell';
+import { anchorOf } from '@/components/entry/entry-sections';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Card } from '@/components/ui/card';
 import { formatDate, withDatesInWords } from '@/components/ui/number-format';
@@ -28,7 +29,11 @@ export function LandingSection({ entry }: { entry: SealedEntry }) {
   const { move, moveSoFar } = outcome ?? { move: null, moveSoFar: null };
   const reading = move ?? moveSoFar;
   return (
-    <Card title={move === null ? 'Where it stands' : 'Where it landed'} subtitle={subtitle(entry)}>
+    <Card
+      anchor={anchorOf('landing')}
+      title={move === null ? 'Where it stands' : 'Where it landed'}
+      subtitle={subtitle(entry)}
+    >
       <LandingBell
         spot={spot}
         totalDeviation={deviation}

@@ -1,19 +1,22 @@
 import { useState } from 'react';
 import { View } from 'react-native';
+import { anchorOf } from '@/components/entry/entry-sections';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { TextField } from '@/components/ui/field';
+import { Icon } from '@/components/ui/icon';
 import { Txt } from '@/components/ui/text';
 import { useSaveLesson } from '@/hooks/entries/use-entries';
 
 /** What the entry taught, in the trader's words. */
-export function LessonSection({ entry }: { entry: SealedEntry }) {
-  const [isWriting, setIsWriting] = useState(false);
+export function LessonSection({ entry, startsWriting = false }: { entry: SealedEntry; startsWriting?: boolean }) {
+  const [isWriting, setIsWriting] = useState(startsWriting && entry.isOwn && entry.row.needsLesson);
   const isDone = entry.row.state === 'closed' || entry.row.state === 'reviewed' || entry.row.state === 'abandoned';
   if (isWriting) return <LessonForm entry={entry} onDone={() => setIsWriting(false)} />;
   return (
     <Card
+      anchor={anchorOf('lesson')}
       title="Lesson"
       action={
         entry.isOwn && isDone ? (
@@ -29,6 +32,12 @@ export function LessonSection({ entry }: { entry: SealedEntry }) {
       <Txt size={entry.lesson === '' ? 'row' : 'body'} colour={entry.lesson === '' ? 'inkSoft' : 'ink'}>
         {entry.lesson === '' ? (isDone ? 'Not written yet.' : 'Comes after the close.') : entry.lesson}
       </Txt>
+      <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8 }}>
+        <Icon name="info" size={16} colour="inkSoft" />
+        <Txt size="note" colour="inkSoft" style={{ flexShrink: 1 }}>
+          What one trade can show: little. It counts as one among many in Scores.
+        </Txt>
+      </View>
     </Card>
   );
 }
@@ -37,7 +46,7 @@ function LessonForm({ entry, onDone }: { entry: SealedEntry; onDone: () => void 
   const [lesson, setLesson] = useState(entry.lesson);
   const save = useSaveLesson();
   return (
-    <Card title="Lesson" subtitle="What would you do the same with the outcome unknown?">
+    <Card anchor={anchorOf('lesson')} title="Lesson" subtitle="What would you do the same with the outcome unknown?">
       <View style={{ gap: 12 }}>
         <TextField label="Lesson" hideLabel value={lesson} onChangeText={setLesson} multiline lines={4} />
         {save.error === null ? null : (

@@ -1,5 +1,6 @@
 import { View } from 'react-native';
 import { OddsBand, OddsBandKey } from '@/components/charts/odds-band';
+import { anchorOf } from '@/components/entry/entry-sections';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Card } from '@/components/ui/card';
 import { formatDate, withDatesInWords } from '@/components/ui/number-format';
@@ -15,6 +16,7 @@ export function OddsOutcomeSection({ entry }: { entry: SealedEntry }) {
   const mean = scores.length === 0 ? null : scores.reduce((sum, score) => sum + score, 0) / scores.length;
   return (
     <Card
+      anchor={anchorOf('odds')}
       title="Odds and what happened"
       subtitle={
         mean === null

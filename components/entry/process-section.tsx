@@ -1,5 +1,6 @@
 import { View } from 'react-native';
 import { type ProcessMark, processMarks } from '@/components/entry/process-words';
+import { anchorOf } from '@/components/entry/entry-sections';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Card } from '@/components/ui/card';
 import { HiddenText } from '@/components/ui/hidden-text';
@@ -15,7 +16,7 @@ export function ProcessSection({ entry }: { entry: SealedEntry }) {
   const process = entry.outcome?.process ?? null;
   if (process === null) {
     return (
-      <Card title="Process">
+      <Card anchor={anchorOf('process')} title="Process">
         <Txt size="row" colour="inkSoft">
           Told from the first fill on: seal, size, price and exit against the plan.
         </Txt>
@@ -25,7 +26,11 @@ export function ProcessSection({ entry }: { entry: SealedEntry }) {
   const marks = processMarks(process, entry, me?.person.timeZone ?? 'America/New_York');
   const kept = marks.filter(({ isKept }) => isKept === true).length;
   return (
-    <Card title="Process" subtitle={`${kept} of ${marks.length} kept, apart from the result`}>
+    <Card
+      anchor={anchorOf('process')}
+      title="Process"
+      subtitle={`${kept} of ${marks.length} kept, apart from the result`}
+    >
       <View role="list" style={{ gap: 10 }}>
         {marks.map((mark, index) => (
           <View key={mark.title} role="listitem" style={{ gap: 10 }}>

@@ -1,5 +1,6 @@
 import { ProfitSteps } from '@/components/charts/profit-steps';
 import { sourceCaution, stepsOf } from '@/components/entry/profit-source-words';
+import { anchorOf } from '@/components/entry/entry-sections';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Card } from '@/components/ui/card';
 import { Txt } from '@/components/ui/text';
@@ -11,7 +12,7 @@ export function ProfitSourceSection({ entry }: { entry: SealedEntry }) {
   const sources = outcome?.sources ?? null;
   if (sources === null) {
     return (
-      <Card title="Where it came from">
+      <Card anchor={anchorOf('sources')} title="Where it came from">
         <Txt size="row" colour="inkSoft">
           {outcome?.profit?.isFinal === true
             ? `Waits for the close of ${symbol} in the session of each fill.`
@@ -22,7 +23,7 @@ export function ProfitSourceSection({ entry }: { entry: SealedEntry }) {
   }
   const caution = sourceCaution(sources, symbol);
   return (
-    <Card title="Where it came from" subtitle={`In ${currency}; the steps add up exactly`}>
+    <Card anchor={anchorOf('sources')} title="Where it came from" subtitle={`In ${currency}; the steps add up exactly`}>
       <ProfitSteps
         expectedMean={outcome?.profit?.expectedMean ?? (sealed.forecast.atExit ?? sealed.forecast.atExpiry).mean.base}
         steps={stepsOf(sources)}

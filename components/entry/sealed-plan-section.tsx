@@ -1,5 +1,6 @@
 import { View } from 'react-native';
 import { LatticeTable } from '@/components/entry/lattice-table';
+import { anchorOf } from '@/components/entry/entry-sections';
 import { type SealedEntry } from '@/components/entry/sealed-entry';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
@@ -40,6 +41,7 @@ export function SealedPlanSection({ entry }: { entry: SealedEntry }) {
   ];
   return (
     <Card
+      anchor={anchorOf('seal')}
       title="Sealed plan"
       subtitle={`${formatInstant(receipt.sealedAt, 'America/New_York', 'withYear')} New York${receipt.isLate ? ', after the first fill' : ''}`}
     >

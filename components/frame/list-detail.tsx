@@ -30,7 +30,10 @@ export function ListDetail({ title, list, detail, placeholder = 'Choose one at t
   const Pair = hasDetail ? View : ListMain;
   return (
     <Pair style={{ flex: 1, flexDirection: 'row', minHeight: 0 }}>
-      <View style={{ width: sizes.list, minHeight: 0, borderRightWidth: 1, borderColor: colours.rule }}>
+      <View
+        {...{ dataSet: { print: 'hide' } }}
+        style={{ width: sizes.list, minHeight: 0, borderRightWidth: 1, borderColor: colours.rule }}
+      >
         <View role="region" aria-label={title} style={{ flex: 1, minHeight: 0 }}>
           {list}
         </View>

@@ -18,6 +18,8 @@ interface Props {
   readonly action?: ReactNode;
   /** Between title and content, over the whole width. */
   readonly head?: ReactNode;
+  /** Links to the sections of a long page; they stay in sight while it scrolls. */
+  readonly sections?: ReactNode;
   /** A form whose own bar takes the place of the bottom bar. */
   readonly hideBottomBar?: boolean;
   /** False for a screen that scrolls inside itself. */
@@ -43,11 +45,35 @@ export function ScreenFrame({ hideBottomBar = false, scrolls = true, children, .
       </Main>
     );
   }
+  const links = top.sections === undefined ? null : <View style={{ paddingHorizontal: gutter }}>{top.sections}</View>;
+  const body = { paddingHorizontal: gutter, paddingTop: links === null ? 4 : 16, paddingBottom: isWide ? 40 : 24 };
+  if (isWide && links !== null) {
+    // The title goes away with the page; the links stay.
+    return (
+      <Main>
+        <ScrollView style={{ flex: 1 }} stickyHeaderIndices={[1]}>
+          <View>
+            <TopBar {...top} />
+            <View style={{ paddingHorizontal: gutter }}>{head}</View>
+          </View>
+          {links}
+          <View style={body}>{children}</View>
+        </ScrollView>
+      </Main>
+    );
+  }
   return (
     <Main>
       <ScrollView style={{ flex: 1 }} stickyHeaderIndices={isWide ? undefined : [0]}>
-        <TopBar {...top} />
-        <View style={{ paddingHorizontal: gutter, paddingTop: 4, paddingBottom: isWide ? 40 : 24 }}>
+        {links === null ? (
+          <TopBar {...top} />
+        ) : (
+          <View>
+            <TopBar {...top} />
+            {links}
+          </View>
+        )}
+        <View style={body}>
           {head}
           {children}
         </View>

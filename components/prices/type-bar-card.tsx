@@ -1,9 +1,10 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { View } from 'react-native';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { DateField } from '@/components/ui/date-field';
 import { TextField } from '@/components/ui/field';
+import { focusHeading } from '@/components/ui/section-links';
 import { Txt } from '@/components/ui/text';
 import { useToast } from '@/components/ui/toast';
 import { usePutBar } from '@/hooks/underlyings/use-underlyings';
@@ -19,17 +20,21 @@ const fields = [
   ['settlement', 'Settlement value (if not the close)'],
 ] as const;
 type Prices = Record<(typeof fields)[number][0], string>;
+const ANCHOR = 'section-type-a-bar';
 const nothing: Prices = { close: '', open: '', high: '', low: '', settlement: '' };
 
-/** One session's prices, typed; typing a session again changes it. */
-export function TypeBarCard({ detail }: { detail: UnderlyingDetail }) {
+/** One session's prices, typed; typing a session again changes it. An address can name the session, which is brought into view. */
+export function TypeBarCard({ detail, session }: { detail: UnderlyingDetail; session?: string }) {
   const toast = useToast();
   const put = usePutBar();
   const last = detail.bars.at(-1);
   const [sessionDate, setSessionDate] = useState(
-    last === undefined ? '' : nextSession(usOptionsCalendar, last.sessionDate).date,
+    session ?? (last === undefined ? '' : nextSession(usOptionsCalendar, last.sessionDate).date),
   );
-  const [prices, setPrices] = useState(nothing);
+  const [prices, setPrices] = useState(() => storedPrices(detail, session));
+  useEffect(() => {
+    if (session !== undefined) focusHeading(ANCHOR);
+  }, [session]);
   const textOrNull = (text: string) => (text.trim() === '' ? null : text.trim());
   const submit = () =>
     put.mutate(
@@ -54,7 +59,11 @@ export function TypeBarCard({ detail }: { detail: UnderlyingDetail }) {
   const general =
     put.error?.problems.some(({ field }) => field === 'sessionDate' || field in nothing) === true ? null : put.error;
   return (
-    <Card title="Type a bar" subtitle={`In ${detail.underlying.currency}; typing a stored session again changes it`}>
+    <Card
+      anchor={ANCHOR}
+      title="Type a bar"
+      subtitle={`In ${detail.underlying.currency}; typing a stored session again changes it`}
+    >
       <View style={{ gap: 12 }}>
         {general === null || general === undefined ? null : (
           <Txt size="row" colour="rust" role="alert">
@@ -95,4 +104,12 @@ export function TypeBarCard({ detail }: { detail: UnderlyingDetail }) {
       </View>
     </Card>
   );
+}
+
+/** What a session has already, so that one price can be added to it without typing the others again. */
+function storedPrices({ bars }: UnderlyingDetail, session: string | undefined): Prices {
+  const bar = bars.find(({ sessionDate }) => sessionDate === session);
+  if (bar === undefined) return nothing;
+  const { close, open, high, low, settlement } = bar;
+  return { close, open: open ?? '', high: high ?? '', low: low ?? '', settlement: settlement ?? '' };
 }

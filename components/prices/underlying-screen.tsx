@@ -29,14 +29,14 @@ const CHART_BARS = 125;
 const HEADLINE_WINDOW = 21;
 
 /** One underlying: how much it moves in a session, by every window, with the closes it rests on. */
-export function UnderlyingScreen({ underlyingId }: { underlyingId: string }) {
+export function UnderlyingScreen({ underlyingId, session }: { underlyingId: string; session?: string }) {
   const { data: detail, error, isPending, refetch } = useUnderlying(underlyingId);
   if (isPending || error)
     return <UnreadyScreen title="Underlying" loading="Loading underlying" error={error} onRetry={refetch} />;
-  return <Underlying detail={detail} />;
+  return <Underlying detail={detail} session={session} />;
 }
 
-function Underlying({ detail }: { detail: UnderlyingDetail }) {
+function Underlying({ detail, session }: { detail: UnderlyingDetail; session: string | undefined }) {
   const router = useRouter();
   const { kind: layout } = useLayout();
   const keepsJournal = useKeepsJournal();
@@ -63,7 +63,7 @@ function Underlying({ detail }: { detail: UnderlyingDetail }) {
       />
     </>
   );
-  const typeBar = keepsJournal ? <TypeBarCard detail={detail} /> : null;
+  const typeBar = keepsJournal ? <TypeBarCard detail={detail} session={session} /> : null;
   const figures = ladder.length > 0 ? <MoveTable ladder={ladder} /> : null;
   return (
     <ScreenFrame

@@ -9,6 +9,8 @@ interface Props {
   readonly subtitle?: string;
   /** Stands at the right of the title. */
   readonly action?: ReactNode;
+  /** Id of the heading, for links to it; it can then take the focus. */
+  readonly anchor?: string;
   readonly padding?: number;
   readonly headingLevel?: 2 | 3 | 4;
   readonly style?: StyleProp<ViewStyle>;
@@ -20,6 +22,7 @@ export function Card({
   title,
   subtitle,
   action,
+  anchor,
   padding = space.cardPadding,
   headingLevel = 2,
   style,
@@ -43,7 +46,12 @@ export function Card({
       {title === undefined ? null : (
         <View style={{ flexDirection: 'row', alignItems: 'flex-start', justifyContent: 'space-between', gap: 12 }}>
           <View style={{ flexShrink: 1 }}>
-            <Heading level={headingLevel} size="body" weight="semibold">
+            <Heading
+              level={headingLevel}
+              size="body"
+              weight="semibold"
+              {...(anchor === undefined ? {} : { id: anchor, tabIndex: -1 })}
+            >
               {title}
             </Heading>
             {subtitle === undefined ? null : (

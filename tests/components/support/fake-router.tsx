@@ -13,7 +13,12 @@ export const usePathname = () => '/';
 function addressOf(href: unknown): string {
   if (typeof href === 'string') return href;
   const { pathname, params } = href as { pathname: string; params: Record<string, string> }; // the other form of an Href
-  return pathname.replace(/\[(\w+)\]/g, (_, name: string) => params[name] ?? '');
+  const query = new URLSearchParams(params);
+  const path = pathname.replace(/\[(\w+)\]/g, (_, name: string) => {
+    query.delete(name);
+    return params[name] ?? '';
+  });
+  return query.toString() === '' ? path : `${path}?${query.toString()}`;
 }
 
 interface LinkProps {
