@@ -64,15 +64,19 @@ function readRows(text: string, fileName: string): Row[] {
   try {
     // Remarks are blanked rather than left out, so that the lines keep their numbers.
     const plain = text.replace(/^[ \t]*#.*$/gm, '');
-    const records: { record: string[]; info: { lines: number } }[] = parse(plain, {
+    const rows: Row[] = [];
+    parse(plain, {
       bom: true,
-      info: true,
       trim: true,
       relax_column_count: true,
       skip_records_with_empty_values: true,
       skip_empty_lines: true,
+      on_record: (cells: string[], { lines }) => {
+        rows.push({ line: lines, cells });
+        return null;
+      },
     });
-    return records.map(({ record, info }) => ({ line: info.lines, cells: record }));
+    return rows;
   } catch (error) {
     if (error instanceof CsvError) throw new SeriesFileError(`${fileName}: ${error.message}. Correct the line.`);
     throw error;
