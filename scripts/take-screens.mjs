@@ -70,6 +70,7 @@ async function tour(size, viewport, colorScheme) {
     ['07-underlying', `/prices/${underlyings[1].underlying.id}`, underlyings[1].underlying.symbol],
     ['08-upload', `/prices/${underlyings[1].underlying.id}/upload`, 'Upload bars'],
     ['09-scores', '/scores', 'Scores'],
+    ['12-review', '/review', 'Weekly review'],
     ['10-desk', '/desk', 'Alder Lane'],
     ['11-caution', '/caution', 'Estimates, not advice'],
   ];

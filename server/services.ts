@@ -20,6 +20,8 @@ import { OutcomeService } from '@/server/outcomes/outcome-service';
 import { type HandlersOf } from '@/server/http/handler';
 import { PeopleStore } from '@/server/people/people-store';
 import { priceUploadHandlers } from '@/server/prices/price-upload-handlers';
+import { weeklyReviewHandlers } from '@/server/reviews/weekly-review-handlers';
+import { WeeklyReviewService } from '@/server/reviews/weekly-review-service';
 import { type Clock } from '@/server/runtime/clock';
 import { type Configuration } from '@/server/runtime/configuration';
 import { type Ids } from '@/server/runtime/ids';
@@ -74,6 +76,7 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
     ...underlyingHandlers({ clock, ids, onBarsChanged }),
     ...priceUploadHandlers({ clock, ids, onBarsChanged }),
     ...entryHandlers({ entries, seals, fills }),
+    ...weeklyReviewHandlers(new WeeklyReviewService({ clock, describer })),
     readToday: ({ scope }) => today.read(scope),
     readScores: ({ scope }) => scores.read(scope),
     exportJournal: async ({ scope, query }) => exports.journal(scope, query),

@@ -17,7 +17,7 @@ export const places: readonly Place[] = [
   { key: 'today', label: 'Today', icon: 'today', href: '/', roots: [''] },
   { key: 'journal', label: 'Journal', icon: 'journal', href: '/journal', roots: ['journal', 'plan', 'fills'] },
   { key: 'prices', label: 'Prices', icon: 'prices', href: '/prices', roots: ['prices'] },
-  { key: 'scores', label: 'Scores', icon: 'scores', href: '/scores', roots: ['scores'] },
+  { key: 'scores', label: 'Scores', icon: 'scores', href: '/scores', roots: ['scores', 'review'] },
   { key: 'desk', label: 'Desk', icon: 'desk', href: '/desk', roots: ['desk'] },
 ];
 

@@ -3,7 +3,7 @@ import { View } from 'react-native';
 import { Icon } from '@/components/ui/icon';
 import { type IconName } from '@/components/ui/icon-shapes';
 import { LinkRow } from '@/components/ui/link-row';
-import { withDatesInWords } from '@/components/ui/number-format';
+import { formatMoney, withDatesInWords } from '@/components/ui/number-format';
 import { Txt } from '@/components/ui/text';
 import { useColours } from '@/components/ui/theme/use-theme';
 import { type TodayTask } from '@/shared/today/today-endpoints';
@@ -13,6 +13,8 @@ const icons: Record<TodayTask['kind'], IconName> = {
   'past-expiry': 'exercise',
   untraded: 'seal',
   'missing-prices': 'bars',
+  'missing-settlement': 'bars',
+  'weekly-review': 'checklist',
   'write-lesson': 'pencil',
   'seal-draft': 'seal',
   start: 'plus',
@@ -48,7 +50,9 @@ export function TaskRow({ task, isFirst, href }: Props) {
             {withDatesInWords(task.title)}
           </Txt>
           <Txt size="row" colour="inkSoft">
-            {withDatesInWords(task.why)}
+            {task.profit === null
+              ? withDatesInWords(task.why)
+              : `${formatMoney(task.profit.realised, { sign: true, currency: task.profit.currency })}; ${withDatesInWords(task.why)}`}
           </Txt>
           <View style={{ flexDirection: 'row', alignItems: 'center', gap: 4 }}>
             <Txt size="row" weight="semibold" colour="bramble">

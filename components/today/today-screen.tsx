@@ -88,6 +88,8 @@ function TodayBody({ today }: { today: Today }) {
             </Txt>
             <View style={{ flexDirection: 'row' }}>
               <Button kind="text" label="See scores" trailingIcon="chevron-right" href="/scores" />
+              <View style={{ width: 24 }} />
+              <Button kind="text" label="Weekly review" trailingIcon="chevron-right" href="/review" />
             </View>
           </Card>
         </Section>
@@ -181,9 +183,16 @@ function hrefOf({ target, kind }: TodayTask): Href {
     case 'entry':
       return kind === 'seal-draft'
         ? { pathname: '/plan/[entryId]', params: { entryId: target.entryId } }
-        : { pathname: '/journal/[entryId]', params: { entryId: target.entryId } };
+        : { pathname: '/journal/[entryId]', params: { entryId: target.entryId, section: target.section } };
     case 'underlying':
-      return { pathname: '/prices/[underlyingId]', params: { underlyingId: target.underlyingId } };
+      return target.sessionDate === null
+        ? { pathname: '/prices/[underlyingId]/upload', params: { underlyingId: target.underlyingId } }
+        : {
+            pathname: '/prices/[underlyingId]',
+            params: { underlyingId: target.underlyingId, session: target.sessionDate },
+          };
+    case 'weekly-review':
+      return '/review';
     case 'new-underlying':
       return '/prices/new';
     case 'new-plan':

@@ -17,6 +17,7 @@ import { MentorshipEntity } from '@/server/people/mentorship-entity';
 import { PersonEntity } from '@/server/people/person-entity';
 import { BarEntity } from '@/server/prices/bar-entity';
 import { PriceUploadEntity } from '@/server/prices/price-upload-entity';
+import { WeeklyReviewEntity } from '@/server/reviews/weekly-review-entity';
 import { SealedContentEntity } from '@/server/seals/sealed-content-entity';
 import { SealedForecastEntity } from '@/server/seals/sealed-forecast-entity';
 import { UnderlyingEntity } from '@/server/underlyings/underlying-entity';
@@ -56,6 +57,7 @@ export function createDataSource(url: string): DataSource {
       FillEntity,
       OutcomeEntity,
       OutcomeChangeEntity,
+      WeeklyReviewEntity,
       ScoredOddsEntity,
     ],
   });

@@ -17,6 +17,7 @@ export const tableGrants = {
   fill: ['SELECT', 'INSERT', 'DELETE'],
   outcome: ['SELECT', 'INSERT', 'UPDATE'],
   outcome_change: ['SELECT', 'INSERT'],
+  weekly_review: ['SELECT', 'INSERT', 'UPDATE'],
   scored_odds: ['SELECT', 'INSERT', 'UPDATE'],
   migration: ['SELECT'],
 } as const;

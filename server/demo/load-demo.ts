@@ -272,10 +272,14 @@ class DemoWriter {
     const isExpiry = exitBar.sessionDate === demo.expirySessionDate;
     const exitSession = usOptionsCalendar.sessionOn(exitBar.sessionDate);
     if (exitSession === null) return;
-    for (const leg of demo.plan.legs) {
-      const spot = Number(exitBar.close);
+    const spot = Number(exitBar.close);
+    const intrinsicOf = ({ type, strikePrice }: DraftLeg) =>
+      Math.max(0, type === 'call' ? spot - Number(strikePrice) : Number(strikePrice) - spot);
+    // What expires without value ends at the close, after what was traded that day.
+    const inOrder = [...demo.plan.legs].sort((left, right) => intrinsicOf(right) - intrinsicOf(left));
+    for (const leg of inOrder) {
       const strike = Number(leg.strikePrice);
-      const intrinsic = Math.max(0, leg.type === 'call' ? spot - strike : strike - spot);
+      const intrinsic = intrinsicOf(leg);
       const sessionsLeft = countSessions(usOptionsCalendar, {
         after: exitBar.sessionDate,
         through: demo.expirySessionDate,

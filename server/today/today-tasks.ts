@@ -1,24 +1,47 @@
 import { type EntryRow } from '@/shared/entries/entry';
 import { type ListedUnderlying } from '@/shared/underlyings/underlying-endpoints';
+import { type OutcomeWait } from '@/shared/entries/outcome-waits';
 import { type TodayTask } from '@/shared/today/today-endpoints';
+
+/** An entry and one thing it waits for. */
+export interface Waiting {
+  readonly row: EntryRow;
+  readonly wait: OutcomeWait;
+}
 
 export interface TodayFacts {
   /** Session whose close has passed last. */
   readonly lastSessionDate: string;
   readonly nextSessionDate: string;
   readonly own: readonly EntryRow[];
+  /** What own entries wait for although it could be there. */
+  readonly waits: readonly Waiting[];
+  /** How many odds of an entry have their answer, by its id. */
+  readonly answers: ReadonlyMap<string, { readonly known: number; readonly of: number }>;
+  readonly isWeekToReview: boolean;
   readonly underlyings: readonly ListedUnderlying[];
 }
 
+/** A line; only one about a closed entry names its profit. */
+type Line = Omit<TodayTask, 'profit'> & Partial<Pick<TodayTask, 'profit'>>;
+
 /** What needs a trader, in the order it must be done. */
 export function todayTasks(facts: TodayFacts): TodayTask[] {
-  const tasks = [...expiries(facts), ...untraded(facts), ...missingPrices(facts), ...lessons(facts), ...drafts(facts)];
-  return tasks.length > 0 ? tasks : starts(facts);
+  const tasks = [
+    ...expiries(facts),
+    ...untraded(facts),
+    ...missingPrices(facts),
+    ...missingValues(facts),
+    ...lessons(facts),
+    ...weeks(facts),
+    ...drafts(facts),
+  ].map((task): TodayTask => ({ profit: null, ...task }));
+  return tasks.length > 0 ? tasks : starts(facts).map((task) => ({ ...task, profit: null }));
 }
 
 const nameOf = ({ underlying, structureName }: EntryRow) => `${underlying.symbol} ${structureName}`;
 
-function expiries({ own, lastSessionDate, nextSessionDate }: TodayFacts): TodayTask[] {
+function expiries({ own, lastSessionDate, nextSessionDate }: TodayFacts): Line[] {
   return own
     .filter((row) => row.state === 'open' && row.expirySessionDate !== null && row.expirySessionDate <= nextSessionDate)
     .map((row) => {
@@ -31,12 +54,12 @@ function expiries({ own, lastSessionDate, nextSessionDate }: TodayFacts): TodayT
           ? 'Its position is still open here. Add the expiry, exercise or assignment.'
           : 'Decide for each leg: close it, let it expire, or exercise.',
         action: isPast ? 'Close it out' : 'Look at the plan',
-        target: { kind: 'entry', entryId: row.id, section: isPast ? 'fills' : 'plan' },
+        target: { kind: 'entry', entryId: row.id, section: isPast ? 'fills' : 'seal' },
       };
     });
 }
 
-function untraded({ own, lastSessionDate }: TodayFacts): TodayTask[] {
+function untraded({ own, lastSessionDate }: TodayFacts): Line[] {
   return own
     .filter((row) => row.state === 'sealed' && row.exitSessionDate !== null && row.exitSessionDate <= lastSessionDate)
     .map((row) => ({
@@ -49,7 +72,8 @@ function untraded({ own, lastSessionDate }: TodayFacts): TodayTask[] {
     }));
 }
 
-function missingPrices({ own, underlyings }: TodayFacts): TodayTask[] {
+/** Bars that end too early, with what they hold up. */
+function missingPrices({ own, underlyings, waits }: TodayFacts): Line[] {
   return underlyings
     .filter(({ underlying, sessionsBehind, lastBar }) => {
       const isUsed = own.some(
@@ -57,33 +81,97 @@ function missingPrices({ own, underlyings }: TodayFacts): TodayTask[] {
           row.underlying.id === underlying.id &&
           (row.state === 'sealed' || row.state === 'open' || row.state === 'abandoned'),
       );
-      return isUsed && (sessionsBehind > 0 || lastBar === null);
+      const isAwaited = waits.some(({ row, wait }) => row.underlying.id === underlying.id && wait.mend === 'bars');
+      return (isUsed || isAwaited) && (sessionsBehind > 0 || lastBar === null);
     })
-    .map(({ underlying, lastBar, sessionsBehind }) => ({
-      kind: 'missing-prices',
-      group: 'from-today',
-      title:
-        lastBar === null ? `${underlying.symbol} has no bars` : `${underlying.symbol} stops at ${lastBar.sessionDate}`,
-      why: `${sessionsBehind === 1 ? 'One session is' : `${sessionsBehind} sessions are`} missing; outcomes wait for ${sessionsBehind === 1 ? 'it' : 'them'}.`,
-      action: 'Add the bars',
-      target: { kind: 'underlying', underlyingId: underlying.id },
-    }));
+    .map(({ underlying, lastBar, sessionsBehind }) => {
+      const waiting = waits.filter(({ row, wait }) => row.underlying.id === underlying.id && wait.mend === 'bars');
+      return {
+        kind: 'missing-prices',
+        group: 'from-today',
+        title:
+          lastBar === null
+            ? `${underlying.symbol} has no bars`
+            : `${underlying.symbol} stops at ${lastBar.sessionDate}`,
+        why: `${sessionsBehind === 1 ? 'One session is' : `${sessionsBehind} sessions are`} missing${resolves(waiting)}.`,
+        action: 'Add the bars',
+        target: { kind: 'underlying', underlyingId: underlying.id, sessionDate: null },
+      };
+    });
 }
 
-function lessons({ own }: TodayFacts): TodayTask[] {
+/** Closes and settlement values that are missing although later bars are there: each holds up what could be resolved now. */
+function missingValues({ underlyings, waits }: TodayFacts): Line[] {
+  const lines = new Map<string, Waiting[]>();
+  for (const waiting of waits) {
+    const { row, wait } = waiting;
+    const lastBar = underlyings.find(({ underlying }) => underlying.id === row.underlying.id)?.lastBar;
+    const isTold = lastBar == null || wait.sessionDate > lastBar.sessionDate; // by the line about the missing bars
+    if (wait.mend === 'fill' || (wait.mend === 'bars' && isTold)) continue;
+    const key = `${row.underlying.id} ${wait.what}`;
+    lines.set(key, [...(lines.get(key) ?? []), waiting]);
+  }
+  return [...lines.values()].flatMap((waiting) => {
+    const [first] = waiting;
+    if (first === undefined) return [];
+    const { row, wait } = first;
+    return [
+      {
+        kind: wait.mend === 'settlement' ? 'missing-settlement' : 'missing-prices',
+        group: 'from-today',
+        title: `${row.underlying.symbol} lacks ${wait.what}`,
+        why: `All else is there${resolves(waiting)}.`,
+        action: wait.mend === 'settlement' ? 'Type the value' : 'Type the bar',
+        target: { kind: 'underlying', underlyingId: row.underlying.id, sessionDate: wait.sessionDate },
+      },
+    ];
+  });
+}
+
+/** "; two entries wait for it: bull put 97 / 95, long 102 call". */
+function resolves(waiting: readonly Waiting[]): string {
+  const names = [...new Map(waiting.map(({ row }) => [row.id, row.structureName])).values()];
+  if (names.length === 0) return '';
+  const shown = names.slice(0, 2).join(', ');
+  return `; ${names.length === 1 ? 'one entry waits' : `${names.length} entries wait`}: ${shown}${names.length > 2 ? ' and more' : ''}`;
+}
+
+function lessons({ own, answers }: TodayFacts): Line[] {
   return own
     .filter((row) => row.needsLesson)
     .map((row) => ({
       kind: 'write-lesson',
       group: 'from-today',
       title: `${nameOf(row)} is closed`,
-      why: 'See where it landed, then write what it taught.',
+      profit: row.realisedProfit === null ? null : { realised: row.realisedProfit, currency: row.underlying.currency },
+      why: `${answered(answers.get(row.id))} The lesson is still blank.`,
       action: 'Write the lesson',
       target: { kind: 'entry', entryId: row.id, section: 'lesson' },
     }));
 }
 
-function drafts({ own }: TodayFacts): TodayTask[] {
+function weeks({ isWeekToReview }: TodayFacts): Line[] {
+  if (!isWeekToReview) return [];
+  return [
+    {
+      kind: 'weekly-review',
+      group: 'when-ready',
+      title: 'The week is over',
+      why: 'Look back at it, and take one rule to keep, change or drop.',
+      action: 'Review the week',
+      target: { kind: 'weekly-review' },
+    },
+  ];
+}
+
+function answered(answers: { known: number; of: number } | undefined): string {
+  if (answers === undefined || answers.known === 0) return 'no odds are answered yet.';
+  return answers.known === answers.of
+    ? 'all odds are answered.'
+    : `${answers.known} of ${answers.of} odds are answered.`;
+}
+
+function drafts({ own }: TodayFacts): Line[] {
   return own
     .filter((row) => row.state === 'draft')
     .map((row) => ({
@@ -92,11 +180,11 @@ function drafts({ own }: TodayFacts): TodayTask[] {
       title: `${nameOf(row)} is a draft`,
       why: 'Odds count only when they are sealed before the first fill.',
       action: 'Go on planning',
-      target: { kind: 'entry', entryId: row.id, section: 'plan' },
+      target: { kind: 'entry', entryId: row.id, section: 'seal' },
     }));
 }
 
-function starts({ own, underlyings }: TodayFacts): TodayTask[] {
+function starts({ own, underlyings }: TodayFacts): Line[] {
   if (underlyings.length === 0) {
     return [
       {

@@ -4,6 +4,7 @@ import { engineEndpoints } from '@/shared/engine/engine-endpoints';
 import { entryEndpoints } from '@/shared/entries/entry-endpoints';
 import { exportEndpoints } from '@/shared/exports/export-endpoints';
 import { priceUploadEndpoints } from '@/shared/prices/price-upload-endpoints';
+import { weeklyReviewEndpoints } from '@/shared/reviews/weekly-review-endpoints';
 import { scoreEndpoints } from '@/shared/scores/score-endpoints';
 import { todayEndpoints } from '@/shared/today/today-endpoints';
 import { underlyingEndpoints } from '@/shared/underlyings/underlying-endpoints';
@@ -17,6 +18,7 @@ export const allEndpoints = {
   ...entryEndpoints,
   ...todayEndpoints,
   ...scoreEndpoints,
+  ...weeklyReviewEndpoints,
   ...engineEndpoints,
   ...exportEndpoints,
 };

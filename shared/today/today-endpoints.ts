@@ -1,25 +1,43 @@
 import { z } from 'zod';
 import { defineEndpoint } from '@/shared/contract/define-endpoint';
-import { idSchema, instantSchema, sessionDateSchema } from '@/shared/contract/fields';
+import { decimalTextSchema, idSchema, instantSchema, sessionDateSchema } from '@/shared/contract/fields';
 import { noInput } from '@/shared/contract/no-input';
 import { roles } from '@/shared/contract/roles';
 import { entryRowSchema } from '@/shared/entries/entry';
 
 const taskSchema = z.strictObject({
-  kind: z.enum(['expiring', 'past-expiry', 'untraded', 'missing-prices', 'write-lesson', 'seal-draft', 'start']),
+  kind: z.enum([
+    'expiring',
+    'past-expiry',
+    'untraded',
+    'missing-prices',
+    'missing-settlement',
+    'write-lesson',
+    'weekly-review',
+    'seal-draft',
+    'start',
+  ]),
   /** When it must be done. */
   group: z.enum(['before-next-open', 'from-today', 'when-ready']),
   title: z.string(),
   why: z.string(),
+  /** What a closed entry brought; it stands before the reason. */
+  profit: z.strictObject({ realised: decimalTextSchema, currency: z.string() }).nullable(),
   /** The verb on the line. */
   action: z.string(),
   target: z.discriminatedUnion('kind', [
     z.strictObject({
       kind: z.literal('entry'),
       entryId: idSchema,
-      section: z.enum(['plan', 'fills', 'lesson', 'outcome']),
+      section: z.enum(['landing', 'fills', 'lesson', 'seal']),
     }),
-    z.strictObject({ kind: z.literal('underlying'), underlyingId: idSchema }),
+    /** The page where bars are uploaded, or the place where the bar of a session is typed. */
+    z.strictObject({
+      kind: z.literal('underlying'),
+      underlyingId: idSchema,
+      sessionDate: sessionDateSchema.nullable(),
+    }),
+    z.strictObject({ kind: z.literal('weekly-review') }),
     z.strictObject({ kind: z.literal('new-underlying') }),
     z.strictObject({ kind: z.literal('new-plan') }),
   ]),

@@ -23,6 +23,7 @@ import { KeepSealedContentFromUpdate } from '@/server/database/migrations/0022-k
 import { TieSharesToTheirExercise } from '@/server/database/migrations/0023-tie-shares-to-their-exercise';
 import { NotePricesBesideFills } from '@/server/database/migrations/0024-note-prices-beside-fills';
 import { CreateOutcomeChange } from '@/server/database/migrations/0030-create-outcome-change';
+import { CreateWeeklyReview } from '@/server/database/migrations/0031-create-weekly-review';
 
 /** In the order they are applied; a new one goes to the end. */
 export const migrations = [
@@ -51,4 +52,5 @@ export const migrations = [
   TieSharesToTheirExercise,
   NotePricesBesideFills,
   CreateOutcomeChange,
+  CreateWeeklyReview,
 ];

@@ -12,6 +12,7 @@ const task = (changes: Partial<TodayTask>): TodayTask => ({
   group: 'from-today',
   title: 'Something',
   why: 'A reason.',
+  profit: null,
   action: 'Do it',
   target: { kind: 'new-plan' },
   ...changes,
@@ -33,17 +34,29 @@ async function show(tasks: TodayTask[]) {
   await screen.findByRole('heading', { name: 'How your odds are doing' });
 }
 
-const entry = { kind: 'entry', entryId: ids.entry, section: 'plan' } as const;
+const entry = { kind: 'entry', entryId: ids.entry, section: 'lesson' } as const;
 
 describe('a line of Today', () => {
   it.each([
     ['a draft', task({ kind: 'seal-draft', target: entry }), `/plan/${ids.entry}`],
-    ['a missing lesson', task({ kind: 'write-lesson', target: entry }), `/journal/${ids.entry}`],
+    ['a missing lesson', task({ kind: 'write-lesson', target: entry }), `/journal/${ids.entry}?section=lesson`],
     [
       'missing prices',
-      task({ kind: 'missing-prices', target: { kind: 'underlying', underlyingId: ids.underlying } }),
-      `/prices/${ids.underlying}`,
+      task({
+        kind: 'missing-prices',
+        target: { kind: 'underlying', underlyingId: ids.underlying, sessionDate: null },
+      }),
+      `/prices/${ids.underlying}/upload`,
     ],
+    [
+      'a missing settlement value',
+      task({
+        kind: 'missing-settlement',
+        target: { kind: 'underlying', underlyingId: ids.underlying, sessionDate: '2026-12-18' },
+      }),
+      `/prices/${ids.underlying}?session=2026-12-18`,
+    ],
+    ['the week that ended', task({ kind: 'weekly-review', target: { kind: 'weekly-review' } }), '/review'],
     ['the first underlying', task({ target: { kind: 'new-underlying' } }), '/prices/new'],
     ['the first plan', task({}), '/plan/new'],
   ])('leads from %s to where it is done', async (_, line, address) => {
@@ -54,6 +67,20 @@ describe('a line of Today', () => {
   it('says its dates in words', async () => {
     await show([task({ title: 'ZZIX stops at 2026-11-30' })]);
     expect(screen.getByText('ZZIX stops at 30 Nov')).toBeTruthy();
+  });
+});
+
+describe('a closed entry on Today', () => {
+  it('says what it brought, and what of its odds is answered', async () => {
+    await show([
+      task({
+        kind: 'write-lesson',
+        target: entry,
+        profit: { realised: '-318.35', currency: 'USD' },
+        why: '3 of 4 odds are answered. The lesson is still blank.',
+      }),
+    ]);
+    expect(screen.getByText('−318.35 USD; 3 of 4 odds are answered. The lesson is still blank.')).toBeTruthy();
   });
 });
 

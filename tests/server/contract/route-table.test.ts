@@ -48,7 +48,7 @@ describe('the route table', () => {
   });
 
   it('answers 405 with the methods an address takes, and 404 elsewhere', async () => {
-    const rows = { deskId: 'a', underlyingId: 'b', entryId: 'c', uploadId: 'd' };
+    const rows = { deskId: 'a', underlyingId: 'b', entryId: 'c', uploadId: 'd', reviewId: 'd' };
     const methods = ['get', 'post', 'put', 'patch', 'delete'] as const;
     for (const endpoint of endpoints) {
       const taken = endpoints.filter(({ path }) => path === endpoint.path).map(({ method }) => method.toLowerCase());

@@ -256,6 +256,8 @@ const breaches: Readonly<Record<string, Row>> = {
   'sealed_forecast.ck_sealed_forecast_sequence': { sequence: 0 },
   'fill.ck_fill_kind': { kind: 'gift' },
   'fill.ck_fill_amounts': { quantity: '0' },
+  'weekly_review.ck_weekly_review_action': { action: 'forget' },
+  'weekly_review.ck_weekly_review_followed_last': { followed_last: 'maybe' },
   'outcome_change.ck_outcome_change_why': { why: 'whim' },
   'scored_odds.ck_scored_odds_probability': { probability: 1.000001 },
 };

@@ -68,7 +68,7 @@ describe('a sealed entry', () => {
         const call = trader[methodOf(endpoint)](endpoint.path.replace(':entryId', id)).set('If-Match', version);
         const answer = await (endpoint.body === null
           ? call
-          : call.send(sampleBody(endpoint, { deskId: '', underlyingId, entryId: id, uploadId: '' })));
+          : call.send(sampleBody(endpoint, { deskId: '', underlyingId, entryId: id, uploadId: '', reviewId: '' })));
         expect([endpoint.name, version, answer.status, answer.body.error.code]).toEqual([
           endpoint.name,
           version,

@@ -10,7 +10,10 @@ export interface SampleRows {
   readonly underlyingId: string;
   readonly entryId: string;
   readonly uploadId: string;
+  readonly reviewId: string;
 }
+
+const writtenRule = { action: 'keep', rule: 'Seal first.', evidence: 'Three of three.', followedLast: null };
 
 export async function sampleRows(owner: TestPerson): Promise<SampleRows> {
   const underlyingId = await addUnderlying(owner);
@@ -18,11 +21,17 @@ export async function sampleRows(owner: TestPerson): Promise<SampleRows> {
     .post(`/underlyings/${underlyingId}/price-uploads`)
     .attach('file', Buffer.from('Date,Close\n2026-12-07,97.10\n2026-12-08,97.90\n'), 'closes.csv')
     .expect(201);
+  const reviewId = randomUUID();
+  await owner
+    .post('/weekly-reviews')
+    .send({ id: reviewId, week: '2026-11-30', ...writtenRule })
+    .expect(201);
   return {
     deskId: owner.deskId,
     underlyingId,
     entryId: await addDraft(owner, completePlan(underlyingId)),
     uploadId: String(upload.body.id),
+    reviewId,
   };
 }
 
@@ -67,6 +76,8 @@ const bodies: Readonly<Record<string, (rows: SampleRows) => object>> = {
   createEntry: ({ underlyingId }) => ({ id: randomUUID(), plan: completePlan(underlyingId) }),
   saveDraft: ({ underlyingId }) => completePlan(underlyingId),
   addFill: () => fill('sell', option('put', '97'), { price: '0.78', tradedAt: '2026-12-09T20:00:00.000Z' }),
+  createWeeklyReview: () => ({ id: randomUUID(), week: '2026-12-07', ...writtenRule }),
+  editWeeklyReview: () => writtenRule,
   saveLesson: () => ({ lesson: 'Wait for the close.' }),
 };
 

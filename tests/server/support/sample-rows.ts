@@ -201,6 +201,18 @@ export const sampleRows: Readonly<Record<string, (ids: DeskIds) => Row>> = {
     changes: '[]',
     at: instant,
   }),
+  weekly_review: ({ deskId, personId }) => ({
+    id: randomUUID(),
+    desk_id: deskId,
+    trader_id: personId,
+    version: 1,
+    week_start_session_date: randomDate(),
+    action: 'keep',
+    rule_text: 'Seal first.',
+    evidence: 'Three of three.',
+    followed_last: null,
+    saved_at: instant,
+  }),
   scored_odds: ({ deskId, personId, entryId }) => ({
     id: randomUUID(),
     desk_id: deskId,

@@ -14,6 +14,7 @@ const deskTables = [
   'fill',
   'outcome',
   'outcome_change',
+  'weekly_review',
   'scored_odds',
 ];
 
