@@ -6,11 +6,14 @@ export interface LevelQuestion {
   readonly spotPrice: number;
   /** Above 0. */
   readonly level: number;
-  /** Standard deviation of the log price over the period, 0 or more. */
+  /** Standard deviation of the log price over the period, 0 to 1e100. */
   readonly totalDeviation: number;
-  /** Mean of the log price change over the period. */
+  /** Mean of the log price change over the period, up to 1e100 in size. */
   readonly logDrift: number;
 }
+
+/** Far beyond any law of a price, and small enough that squares and their ratios stay finite. */
+const LARGEST = 1e100;
 
 /** @throws {DomainError} `level-question-invalid` naming every value. */
 export function checkLevelQuestion({ spotPrice, level, totalDeviation, logDrift }: LevelQuestion): void {
@@ -20,7 +23,7 @@ export function checkLevelQuestion({ spotPrice, level, totalDeviation, logDrift 
     level > 0 &&
     level < Infinity &&
     totalDeviation >= 0 &&
-    totalDeviation < Infinity &&
-    Math.abs(logDrift) < Infinity;
+    totalDeviation <= LARGEST &&
+    Math.abs(logDrift) <= LARGEST;
   if (!isValid) throw new DomainError('level-question-invalid', { spotPrice, level, totalDeviation, logDrift });
 }
