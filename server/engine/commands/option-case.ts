@@ -1,6 +1,5 @@
 import { z } from 'zod';
-import { DomainError } from '@/journal/errors/domain-error';
-import { type EuropeanOption } from '@/journal/pricing/european-option';
+import { type AmericanOption } from '@/journal/pricing/american-option';
 import { escrowedSpot } from '@/journal/pricing/escrowed-spot';
 
 /** What the cases of `price` and `implied` share. */
@@ -14,24 +13,24 @@ export const optionCaseFields = {
   ratePerYear: z.number(),
   dividendYield: z.number().default(0),
   dividends: z.array(z.strictObject({ years: z.number(), amount: z.number() })).default([]),
+  /** How cash dividends move the price; of a European option always 'escrowed', which has a closed form. */
+  dividendModel: z.enum(['spot', 'escrowed']).optional(),
 };
 
 type OptionCase = z.output<z.ZodObject<typeof optionCaseFields>>;
 
-/**
- * The option a case is about, all but its volatility; dividends are taken off the spot.
- * @throws {DomainError} `style-not-supported`, and as escrowedSpot.
- */
-export function optionOfCase(one: OptionCase): Omit<EuropeanOption, 'dailyVolatility'> {
-  if (one.style !== 'european') throw new DomainError('style-not-supported', { style: one.style });
-  const { type, spot, strike, sessions, years, ratePerYear, dividendYield, dividends } = one;
+/** The option a case is about, all but its volatility; of a European one dividends are taken off the spot. @throws as escrowedSpot. */
+export function optionOfCase(one: OptionCase): Omit<AmericanOption, 'dailyVolatility'> {
+  const { type, style, spot, strike, sessions, years, ratePerYear, dividendYield, dividends } = one;
+  const isEuropean = style === 'european';
   return {
     type,
-    spotPrice: escrowedSpot({ spotPrice: spot, dividends, years, ratePerYear }),
+    spotPrice: isEuropean ? escrowedSpot({ spotPrice: spot, dividends, years, ratePerYear }) : spot,
     strikePrice: strike,
     sessions,
     years,
     ratePerYear,
     dividendYield,
+    ...(isEuropean ? {} : { dividends, dividendModel: one.dividendModel ?? 'spot' }),
   };
 }

@@ -53,7 +53,6 @@ describe('price', () => {
   });
 
   it.each([
-    { why: 'american exercise', change: { style: 'american' }, code: 'style-not-supported' },
     { why: 'a spot of 0', change: { spot: 0 }, code: 'option-input-invalid' },
     { why: 'a field nobody knows', change: { volatility: 0.2 }, code: 'case-invalid' },
     { why: 'a number written as text', change: { strike: '102' }, code: 'case-invalid' },
@@ -70,6 +69,29 @@ describe('price', () => {
 
   it('names the field that is wrong', () => {
     expect(errorOf(priceCommand, option).message).toMatch(/^dailyVolatility: /);
+  });
+});
+
+describe('american options', () => {
+  const put = { ...option, type: 'put', style: 'american', sessions: 21, years: 30 / 365, ratePerYear: 0.05 };
+
+  it('are priced with where, and whether, they are exercised now', () => {
+    const value = resultOf(priceCommand, { ...put, dailyVolatility: 0.015 });
+    expect(value.exerciseNow).toBe(false);
+    expect(value.exerciseBoundary).toBeLessThan(100);
+    expect(value.price).toBeGreaterThan(
+      Number(resultOf(priceCommand, { ...put, style: 'european', dailyVolatility: 0.015 }).price),
+    );
+    const implied = resultOf(impliedCommand, { ...put, price: value.price });
+    expect(implied.dailyVolatility).toBeCloseTo(0.015, 9);
+  });
+
+  it('take cash dividends in either model, the stock’s own fall by default', () => {
+    const call = { ...put, type: 'call', dailyVolatility: 0.015, dividends: [{ years: 0.04, amount: 2 }] };
+    const price = (dividendModel?: string) => Number(resultOf(priceCommand, { ...call, dividendModel }).price);
+    expect(price()).toBe(price('spot'));
+    expect(Math.abs(price('escrowed') - price('spot'))).toBeLessThan(0.1);
+    expect(price('escrowed')).not.toBe(price('spot'));
   });
 });
 
@@ -148,6 +170,24 @@ describe('odds', () => {
   it('refuses sessions below 0', () => {
     const question = { spot: 100, level: 102, dailyVolatility: 0.015, sessions: -1, driftPerSession: 0 };
     expect(errorOf(oddsCommand, question).code).toBe('sessions-invalid');
+  });
+});
+
+describe('odds of more than one level', () => {
+  const question = { spot: 100, level: 104, dailyVolatility: 0.015, sessions: 10, driftPerSession: 0 };
+
+  it('says which of two levels is touched first, whichever is named first', () => {
+    const { touchFirst } = resultOf(oddsCommand, { ...question, otherLevel: 97 });
+    const { touchFirst: turned } = resultOf(oddsCommand, { ...question, level: 97, otherLevel: 104 });
+    expect(touchFirst).toMatchObject({ neither: expect.closeTo(Number(Object(turned).neither), 12) });
+    expect(Object(touchFirst).level).toBeCloseTo(Object(turned).otherLevel, 12);
+    expect(Object(touchFirst).level + Object(touchFirst).otherLevel + Object(touchFirst).neither).toBeCloseTo(1, 12);
+  });
+
+  it('adds a touch seen at closes only, and the fatter law of an estimated volatility', () => {
+    const { touch, touchAtCloses, above, student } = resultOf(oddsCommand, { ...question, closes: 10, returns: 20 });
+    expect(touchAtCloses).toBeLessThan(Number(touch));
+    expect(Object(student).above).toBeGreaterThan(Number(above));
   });
 });
 
