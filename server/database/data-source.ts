@@ -11,6 +11,7 @@ import { EntryEntity } from '@/server/entries/entry-entity';
 import { FillEntity } from '@/server/fills/fill-entity';
 import { OutcomeChangeEntity } from '@/server/outcomes/outcome-change-entity';
 import { OutcomeEntity } from '@/server/outcomes/outcome-entity';
+import { ScoredEntryEntity } from '@/server/outcomes/scored-entry-entity';
 import { ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
 import { MembershipEntity } from '@/server/people/membership-entity';
 import { MentorshipEntity } from '@/server/people/mentorship-entity';
@@ -59,6 +60,7 @@ export function createDataSource(url: string): DataSource {
       OutcomeChangeEntity,
       WeeklyReviewEntity,
       ScoredOddsEntity,
+      ScoredEntryEntity,
     ],
   });
 }

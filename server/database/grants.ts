@@ -19,6 +19,7 @@ export const tableGrants = {
   outcome_change: ['SELECT', 'INSERT'],
   weekly_review: ['SELECT', 'INSERT', 'UPDATE'],
   scored_odds: ['SELECT', 'INSERT', 'UPDATE'],
+  scored_entry: ['SELECT', 'INSERT', 'UPDATE'],
   migration: ['SELECT'],
 } as const;
 

@@ -9,6 +9,7 @@ import { FillStore } from '@/server/fills/fill-store';
 import { OutcomeChangeStore } from '@/server/outcomes/outcome-change-store';
 import { pricesCause } from '@/server/outcomes/outcome-cause';
 import { OutcomeEntity } from '@/server/outcomes/outcome-entity';
+import { ScoredEntryStore } from '@/server/outcomes/scored-entry-store';
 import { ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
 import { BarStore } from '@/server/prices/bar-store';
 import { type BarsChange } from '@/server/prices/bars-changed';
@@ -99,7 +100,7 @@ export class OutcomeService {
         { key: ['desk_id', 'entry_id'], overwrite: ['outcome', 'is_complete', 'computed_at'] },
       );
     await scope.repository(ScoredOddsEntity).upsert(
-      outcome.odds.map(({ odds, happened }) => ({
+      outcome.odds.map(({ odds, happened, cannotTell }) => ({
         id: ids.next(),
         entryId: entry.id,
         traderId: entry.traderId,
@@ -109,10 +110,12 @@ export class OutcomeService {
         probability: odds.probability.base,
         marketImplied: odds.marketImplied,
         happened,
+        cannotTell: cannotTell !== null,
         isLateSeal: entry.isLateSeal,
       })),
-      { key: ['desk_id', 'entry_id', 'odds_key'], overwrite: ['happened', 'is_late_seal'] },
+      { key: ['desk_id', 'entry_id', 'odds_key'], overwrite: ['happened', 'cannot_tell', 'is_late_seal'] },
     );
+    await new ScoredEntryStore(scope).keep(ids.next(), entry, seal, outcome);
   }
 }
 

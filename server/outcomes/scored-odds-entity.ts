@@ -27,5 +27,7 @@ export class ScoredOddsEntity {
   @Column({ type: 'double' }) probability!: number;
   @Column({ name: 'market_implied', type: 'double', nullable: true }) marketImplied!: number | null;
   @Column({ type: 'boolean', nullable: true }) happened!: boolean | null;
+  /** No bars will ever answer it: neither scored nor waited for. */
+  @Column({ name: 'cannot_tell', type: 'boolean', default: 0 }) cannotTell!: boolean;
   @Column({ name: 'is_late_seal', type: 'boolean' }) isLateSeal!: boolean;
 }

@@ -22,6 +22,8 @@ import { KeepAuditEventFromDelete } from '@/server/database/migrations/0021-keep
 import { KeepSealedContentFromUpdate } from '@/server/database/migrations/0022-keep-sealed-content-from-update';
 import { TieSharesToTheirExercise } from '@/server/database/migrations/0023-tie-shares-to-their-exercise';
 import { NotePricesBesideFills } from '@/server/database/migrations/0024-note-prices-beside-fills';
+import { CreateScoredEntry } from '@/server/database/migrations/0025-create-scored-entry';
+import { TellOddsWithoutAnswer } from '@/server/database/migrations/0026-tell-odds-without-answer';
 import { CreateOutcomeChange } from '@/server/database/migrations/0030-create-outcome-change';
 import { CreateWeeklyReview } from '@/server/database/migrations/0031-create-weekly-review';
 
@@ -51,6 +53,8 @@ export const migrations = [
   KeepSealedContentFromUpdate,
   TieSharesToTheirExercise,
   NotePricesBesideFills,
+  CreateScoredEntry,
+  TellOddsWithoutAnswer,
   CreateOutcomeChange,
   CreateWeeklyReview,
 ];

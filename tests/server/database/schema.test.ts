@@ -32,6 +32,13 @@ const doubles = [
   'desk.rate_per_year',
   'entry.expected_mean',
   'entry.holding_sessions',
+  'scored_entry.expected_deviation',
+  'scored_entry.expected_mean',
+  'scored_entry.move_deviations',
+  'scored_entry.move_place',
+  'scored_entry.profit_place_high',
+  'scored_entry.profit_place_low',
+  'scored_entry.volatility_ratio',
   'scored_odds.market_implied',
   'scored_odds.probability',
   'underlying.dividend_yield',
@@ -260,6 +267,9 @@ const breaches: Readonly<Record<string, Row>> = {
   'weekly_review.ck_weekly_review_followed_last': { followed_last: 'maybe' },
   'outcome_change.ck_outcome_change_why': { why: 'whim' },
   'scored_odds.ck_scored_odds_probability': { probability: 1.000001 },
+  'scored_entry.ck_scored_entry_horizon': { horizon_class: 'a while' },
+  'scored_entry.ck_scored_entry_exit_tag': { exit_tag: 'whim' },
+  'scored_entry.ck_scored_entry_places': { move_place: 1.000001, profit_place_low: 0.2, profit_place_high: 0.3 },
 };
 
 describe('rules of the schema', () => {

@@ -16,6 +16,7 @@ const deskTables = [
   'outcome_change',
   'weekly_review',
   'scored_odds',
+  'scored_entry',
 ];
 
 /** Statements that may touch a desk's tables without naming the desk, each with its reason. */
