@@ -3,7 +3,7 @@ import { createServer, type Server } from 'node:http';
 import { type AddressInfo } from 'node:net';
 import path from 'node:path';
 import jstat from 'jstat';
-import { type Browser, type Page } from 'playwright-core';
+import { type Browser, type Locator, type Page } from 'playwright-core';
 import { underlyingEndpoints } from '@/shared/underlyings/underlying-endpoints';
 import { accessibilityViolations, launchBrowser, openPage, sizes, type WatchedPage } from '@/tests/e2e/support/browser';
 import { csvOf, publishedCloses, sessionDatesAfter, sessionDatesEnding } from '@/tests/e2e/support/index-series';
@@ -256,6 +256,35 @@ describe.each(Object.entries(sizes))('the main job on a %s screen', (size, viewp
     // Closed after three sessions: the move is that of the last fill's session.
     const moved = Math.log((closes[SESSIONS + 2] ?? 0) / spot) / ((witness?.sd['21'] ?? 1) * Math.sqrt(3));
     await expectText(page.getByRole('main').innerText(), `${moved < 0 ? '−' : '+'}${Math.abs(moved).toFixed(2)}σ`);
+    await isClean();
+  });
+
+  step('finishes the review three taps from Today', async () => {
+    await page.goto(`${origin}/`);
+    let taps = 0;
+    const tap = async (target: Locator) => {
+      taps += 1;
+      await target.click();
+    };
+    await tap(page.getByRole('link', { name: /ZZIX long 1540 call is closed/ }));
+    await tap(field('Lesson'));
+    await isClean();
+    await page.keyboard.type('Three sessions were enough.');
+    await tap(page.getByRole('button', { name: 'Save lesson' }));
+    await page.getByRole('main').getByText('Reviewed', { exact: true }).first().waitFor();
+    expect(taps).toBe(3);
+    await page.getByRole('link', { name: 'Seal', exact: true }).click();
+    expect(await page.evaluate(() => document.activeElement?.textContent)).toBe('Sealed plan');
+    await isClean();
+  });
+
+  step('takes a rule from the week', async () => {
+    await page.goto(`${origin}/review`);
+    await field('The rule').fill('If the target is reached, then sell.');
+    await field('Evidence').fill('One of one.');
+    await isClean();
+    await page.getByRole('button', { name: 'Save rule' }).click();
+    await page.getByText('The rule of this week').waitFor();
     await isClean();
   });
 
