@@ -4,7 +4,7 @@ import { View } from 'react-native';
 import { ScreenFrame } from '@/components/frame/screen-frame';
 import { UnreadyScreen } from '@/components/frame/unready-screen';
 import { RuleSection } from '@/components/review/rule-section';
-import { WeekEntriesCard } from '@/components/review/week-entries-card';
+import { WeekEntries } from '@/components/review/week-entries';
 import { WeekFiguresCard } from '@/components/review/week-figures-card';
 import { WeekOddsCard } from '@/components/review/week-odds-card';
 import { Button } from '@/components/ui/button';
@@ -76,8 +76,8 @@ function WeekBody({ view }: { view: ReviewedWeek }) {
     <Columns isWide={isWide}>
       <>
         <WeekFiguresCard view={view} />
-        <WeekEntriesCard title="Closed" entries={closed} empty="No trade was closed." />
-        <WeekEntriesCard title="Sealed" entries={sealed} empty="No plan was sealed." />
+        <WeekEntries title="Closed" entries={closed} empty="No trade was closed." />
+        <WeekEntries title="Sealed" entries={sealed} empty="No plan was sealed." />
       </>
       <>
         {rule}

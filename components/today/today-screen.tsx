@@ -4,15 +4,16 @@ import { View } from 'react-native';
 import { SessionsAhead } from '@/components/charts/sessions-ahead';
 import { ScreenFrame } from '@/components/frame/screen-frame';
 import { UnreadyScreen } from '@/components/frame/unready-screen';
-import { EntryRowCard } from '@/components/journal/entry-row-card';
+import { EntrySheet } from '@/components/journal/entry-sheet';
 import { TaskRow } from '@/components/today/task-row';
 import { sessionsAhead } from '@/components/today/sessions-ahead-rows';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { CautionLine } from '@/components/ui/caution-line';
+import { LabelledSection } from '@/components/ui/labelled-section';
 import { formatDate } from '@/components/ui/number-format';
 import { EmptyState } from '@/components/ui/states';
-import { Heading, Txt } from '@/components/ui/text';
+import { Txt } from '@/components/ui/text';
 import { radius, space } from '@/components/ui/theme/metrics';
 import { useColours } from '@/components/ui/theme/use-theme';
 import { useLayout } from '@/components/ui/use-layout';
@@ -70,13 +71,13 @@ function TodayBody({ today }: { today: Today }) {
         ) : null}
       </View>
       <View style={[{ gap: 20, minWidth: 0 }, isWide ? { flex: 1 } : null]}>
-        <Section label="Next sessions">
+        <LabelledSection label="Next sessions">
           <Card>
             <SessionsAhead sessions={sessionsAhead(today)} />
           </Card>
-        </Section>
+        </LabelledSection>
         <Running today={today} />
-        <Section label="How your odds are doing" count={`${today.resolvedOddsCount} resolved`}>
+        <LabelledSection label="How your odds are doing" count={`${today.resolvedOddsCount} resolved`}>
           <Card>
             <Txt serif size="head">
               {today.meanBrierScore === null ? 'Too few to say' : `Mean Brier score ${today.meanBrierScore.toFixed(3)}`}
@@ -92,27 +93,9 @@ function TodayBody({ today }: { today: Today }) {
               <Button kind="text" label="Weekly review" trailingIcon="chevron-right" href="/review" />
             </View>
           </Card>
-        </Section>
+        </LabelledSection>
         <CautionLine />
       </View>
-    </View>
-  );
-}
-
-function Section({ label, count, children }: { label: string; count?: string; children: React.ReactNode }) {
-  return (
-    <View style={{ gap: space.sectionGap }}>
-      <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'baseline' }}>
-        <Heading level={2} size="row" weight="semibold">
-          {label}
-        </Heading>
-        {count === undefined ? null : (
-          <Txt size="note" colour="inkSoft">
-            {count}
-          </Txt>
-        )}
-      </View>
-      {children}
     </View>
   );
 }
@@ -126,7 +109,7 @@ function TaskGroup({ label, tasks }: { label: string; tasks: readonly TodayTask[
   if (tasks.length === 0) return null;
   const shown = showsAll || tasks.length <= MOST_TASKS + 1 ? tasks : tasks.slice(0, MOST_TASKS);
   return (
-    <Section label={label} count={String(tasks.length)}>
+    <LabelledSection label={label} count={String(tasks.length)}>
       <View
         role="list"
         style={{
@@ -150,31 +133,16 @@ function TaskGroup({ label, tasks }: { label: string; tasks: readonly TodayTask[
           />
         </View>
       ) : null}
-    </Section>
+    </LabelledSection>
   );
 }
 
 function Running({ today }: { today: Today }) {
-  const colours = useColours();
   if (today.running.length === 0) return null;
   return (
-    <Section label="Open and sealed" count={`${today.running.length} of ${today.runningCount}`}>
-      <View
-        style={{
-          backgroundColor: colours.sheet,
-          borderColor: colours.rule,
-          borderWidth: 1,
-          borderRadius: radius.card,
-          overflow: 'hidden',
-        }}
-      >
-        {today.running.map((row, index) => (
-          <View key={row.id} style={{ borderTopWidth: index === 0 ? 0 : 1, borderColor: colours.rule }}>
-            <EntryRowCard row={row} isChosen={false} showsTrader={false} />
-          </View>
-        ))}
-      </View>
-    </Section>
+    <LabelledSection label="Open and sealed" count={`${today.running.length} of ${today.runningCount}`}>
+      <EntrySheet entries={today.running} />
+    </LabelledSection>
   );
 }
 

@@ -274,7 +274,7 @@ describe.each(Object.entries(sizes))('the main job on a %s screen', (size, viewp
     await page.getByRole('main').getByText('Reviewed', { exact: true }).first().waitFor();
     expect(taps).toBe(3);
     await page.getByRole('link', { name: 'Seal', exact: true }).click();
-    expect(await page.evaluate(() => document.activeElement?.textContent)).toBe('Sealed plan');
+    await expectText(page.locator(':focus').innerText(), 'Sealed plan');
     await isClean();
   });
 

@@ -10,12 +10,12 @@ import {
   indexFields,
   option,
   putBar,
+  sessionsToExpiry,
 } from '@/tests/server/support/journal';
-import { startTestApp, type TestApp, type TestPerson } from '@/tests/server/support/test-app';
+import { startTestApp, type TestApp } from '@/tests/server/support/test-app';
 
 jest.setTimeout(60_000);
 
-const sessions = ['2026-12-10', '2026-12-11', '2026-12-14', '2026-12-15', '2026-12-16', '2026-12-17', expiry];
 let app: TestApp;
 beforeAll(async () => {
   app = await startTestApp();
@@ -40,7 +40,7 @@ describe('the history of an outcome', () => {
     const id = await addSealed(before, completePlan(underlyingId));
     expect((await entryOf(before, id)).history).toEqual([]);
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const date of sessions.slice(0, -1)) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry.slice(0, -1)) await putBar(trader, { underlyingId, date, close: '98' });
     // A running move that goes on to the next session is no change.
     expect((await entryOf(trader, id)).history).toEqual([]);
     await putBar(trader, { underlyingId, date: expiry, close: '98.9' });
@@ -59,7 +59,7 @@ describe('the history of an outcome', () => {
     const underlyingId = await addUnderlying(before);
     const id = await addSealed(before, completePlan(underlyingId));
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
     const first = await entryOf(trader, id);
     const later = await comeBack(app, before, '2026-12-19T15:00:00.000Z');
     await putBar(later, { underlyingId, date: expiry, close: '96' });
@@ -113,7 +113,7 @@ describe('the history of an outcome', () => {
     const underlyingId = await addUnderlying(before);
     const id = await addSealed(before, completePlan(underlyingId));
     const trader = await comeBack(app, before, '2026-12-11T22:00:00.000Z');
-    for (const date of sessions.slice(0, 2)) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry.slice(0, 2)) await putBar(trader, { underlyingId, date, close: '98' });
     const add = (kind: string, price: string, tradedAt: string) =>
       trader
         .post(`/entries/${id}/fills`)
@@ -149,7 +149,7 @@ describe('the history of an outcome', () => {
     const underlyingId = await addUnderlying(before, { fields: { ...indexFields, settlementTime: 'am' } });
     const id = await addSealed(before, completePlan(underlyingId));
     const evening = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const date of sessions) await putBar(evening, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry) await putBar(evening, { underlyingId, date, close: '98' });
     const waiting = await entryOf(evening, id);
     expect(waiting.outcome).toMatchObject({ isComplete: false, moveWaitsFor: `the settlement value of ${expiry}` });
     const trader = await comeBack(app, before, '2026-12-21T22:00:00.000Z');
@@ -175,7 +175,8 @@ describe('the history of an outcome', () => {
     const underlyingId = await addUnderlying(before);
     const id = await addSealed(before, completePlan(underlyingId));
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const date of [...sessions, ...sessions]) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of [...sessionsToExpiry, ...sessionsToExpiry])
+      await putBar(trader, { underlyingId, date, close: '98' });
     expect((await entryOf(trader, id)).history).toHaveLength(1);
   });
 });

@@ -1,4 +1,3 @@
-import { type Entry } from '@/shared/entries/entry';
 import { comeBack, entryOf } from '@/tests/server/support/come-back';
 import {
   addDraft,
@@ -10,12 +9,12 @@ import {
   indexFields,
   option,
   putBar,
+  sessionsToExpiry,
 } from '@/tests/server/support/journal';
 import { startTestApp, type TestApp, type TestPerson } from '@/tests/server/support/test-app';
 
 jest.setTimeout(60_000);
 
-const sessions = ['2026-12-10', '2026-12-11', '2026-12-14', '2026-12-15', '2026-12-16', '2026-12-17', expiry];
 let app: TestApp;
 beforeAll(async () => {
   app = await startTestApp();
@@ -39,7 +38,7 @@ describe('an outcome', () => {
     const id = await addSealed(before, completePlan(underlyingId, { stopPrice: '97' }));
     expect(await entryOf(before, id)).toMatchObject({ outcome: { isComplete: false, move: null } });
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const [index, date] of sessions.slice(0, -1).entries())
+    for (const [index, date] of sessionsToExpiry.slice(0, -1).entries())
       await putBar(trader, { underlyingId, date, close: String(98 + index / 10) });
     const waiting = await entryOf(trader, id);
     expect(waiting.outcome).toMatchObject({ isComplete: false, move: null, moveSoFar: { sessionDate: '2026-12-17' } });
@@ -82,7 +81,7 @@ describe('an outcome', () => {
     const underlyingId = await addUnderlying(before, { fields: { ...indexFields, settlementTime: 'am' } });
     const id = await addSealed(before, completePlan(underlyingId));
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
     const waitsFor = `the settlement value of ${expiry}`;
     expect((await entryOf(trader, id)).outcome).toMatchObject({
       isComplete: false,
@@ -103,7 +102,7 @@ describe('an outcome', () => {
     const underlyingId = await addUnderlying(before);
     const id = await addSealed(before, completePlan(underlyingId));
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
     const inTheMoney = async () =>
       (await entryOf(trader, id)).outcome?.odds
         .filter(({ odds }) => odds.event.kind === 'in-the-money')
@@ -120,7 +119,7 @@ describe('an outcome', () => {
     const early = fill('sell', option('put', '97'), { price: '0.78', tradedAt: '2026-12-09T20:00:00.000Z' });
     await before.post(`/entries/${id}/fills`).send(early).expect(201);
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
     const { body } = await trader.get('/scores').expect(200);
     expect(body).toMatchObject({ count: 0 });
     expect(body.lateCount).toBeGreaterThan(0);
@@ -132,7 +131,7 @@ describe('an outcome', () => {
     const id = await addSealed(before, completePlan(underlyingId));
     await before.post(`/entries/${id}/abandon`).set('If-Match', '2').expect(200);
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
-    for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
     expect((await trader.get('/scores').expect(200)).body.count).toBeGreaterThan(0);
   });
 });

@@ -2,12 +2,20 @@ import { randomUUID } from 'node:crypto';
 import { type ReviewedWeek } from '@/shared/reviews/weekly-review-endpoints';
 import { type Today } from '@/shared/today/today-endpoints';
 import { comeBack } from '@/tests/server/support/come-back';
-import { addSealed, addUnderlying, completePlan, expiry, fill, option, putBar } from '@/tests/server/support/journal';
+import {
+  addSealed,
+  addUnderlying,
+  completePlan,
+  expiry,
+  fill,
+  option,
+  putBar,
+  sessionsToExpiry,
+} from '@/tests/server/support/journal';
 import { startTestApp, type TestApp, type TestPerson } from '@/tests/server/support/test-app';
 
 jest.setTimeout(60_000);
 
-const sessions = ['2026-12-10', '2026-12-11', '2026-12-14', '2026-12-15', '2026-12-16', '2026-12-17', expiry];
 const rule = { action: 'keep', rule: 'Seal before the first fill.', evidence: 'Three of three.', followedLast: null };
 let app: TestApp;
 beforeAll(async () => {
@@ -33,7 +41,7 @@ async function tradedWeek(): Promise<{ before: TestPerson; trader: TestPerson; e
   const underlyingId = await addUnderlying(before);
   const entryId = await addSealed(before, completePlan(underlyingId));
   const trader = await comeBack(app, before, '2026-12-19T15:00:00.000Z');
-  for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+  for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
   const add = (kind: string, price: string, tradedAt: string) =>
     trader
       .post(`/entries/${entryId}/fills`)

@@ -4,6 +4,16 @@ import { newDraftPlan } from '@/shared/entries/new-draft-plan';
 import { type TestPerson } from '@/tests/server/support/test-app';
 
 export const expiry = '2026-12-18';
+/** The sessions after that of the first bar, through the expiry. */
+export const sessionsToExpiry = [
+  '2026-12-10',
+  '2026-12-11',
+  '2026-12-14',
+  '2026-12-15',
+  '2026-12-16',
+  '2026-12-17',
+  expiry,
+];
 const presets = { name: 'Desk', currency: 'USD', ratePerYear: 0.04, overnightShare: 0.3, feePerContract: '0.65' };
 
 export const shareFields = {

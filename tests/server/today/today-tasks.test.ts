@@ -9,12 +9,12 @@ import {
   indexFields,
   option,
   putBar,
+  sessionsToExpiry,
 } from '@/tests/server/support/journal';
 import { startTestApp, type TestApp, type TestPerson } from '@/tests/server/support/test-app';
 
 jest.setTimeout(60_000);
 
-const sessions = ['2026-12-10', '2026-12-11', '2026-12-14', '2026-12-15', '2026-12-16', '2026-12-17', expiry];
 let app: TestApp;
 beforeAll(async () => {
   app = await startTestApp();
@@ -57,7 +57,7 @@ describe('Today after the close', () => {
     const underlyingId = await addUnderlying(before);
     await addSealed(before, completePlan(underlyingId, { stopPrice: '97' }));
     const trader = await comeBack(app, before, afterExpiry);
-    for (const date of sessions.filter((session) => session !== '2026-12-15'))
+    for (const date of sessionsToExpiry.filter((session) => session !== '2026-12-15'))
       await putBar(trader, { underlyingId, date, close: '98' });
     expect(await tasksOf(trader)).toContainEqual(
       expect.objectContaining({
@@ -76,7 +76,7 @@ describe('Today after the close', () => {
     const underlyingId = await addUnderlying(before, { fields: { ...indexFields, settlementTime: 'am' } });
     await addSealed(before, completePlan(underlyingId));
     const trader = await comeBack(app, before, afterExpiry);
-    for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
     expect(await tasksOf(trader)).toContainEqual({
       kind: 'missing-settlement',
       group: 'from-today',
@@ -95,7 +95,7 @@ describe('Today after the close', () => {
     const underlyingId = await addUnderlying(before);
     const id = await addSealed(before, completePlan(underlyingId));
     const trader = await comeBack(app, before, afterExpiry);
-    for (const date of sessions) await putBar(trader, { underlyingId, date, close: '98' });
+    for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
     const add = (kind: string, price: string, tradedAt: string) =>
       trader
         .post(`/entries/${id}/fills`)
