@@ -8,6 +8,7 @@ import {
   sessionsInRange,
 } from '@/journal/sessions/exchange-calendar';
 import { addDays } from '@/journal/sessions/session-date';
+import { toDecimal, toDecimalText } from '@/journal/money/decimal';
 import { latestCloseAt } from '@/journal/sessions/session-clock';
 import { usOptionsCalendar } from '@/journal/sessions/us-options-calendar';
 import { defaultOvernightShare } from '@/journal/volatility/overnight-share';
@@ -20,6 +21,7 @@ import { emailKeyOf } from '@/server/people/people-store';
 import { MembershipEntity } from '@/server/people/membership-entity';
 import { MentorshipEntity } from '@/server/people/mentorship-entity';
 import { BarStore } from '@/server/prices/bar-store';
+import { type OnBarsChanged } from '@/server/prices/bars-changed';
 import { type Clock } from '@/server/runtime/clock';
 import { type Configuration } from '@/server/runtime/configuration';
 import { systemIds } from '@/server/runtime/ids';
@@ -66,11 +68,14 @@ export async function loadDemo({
       random,
       setTime: (instant) => (time = new Date(instant)),
     });
-    for (const moment of momentsOf(markets, sessions, random)) await writer.write(moment);
+    const moments = momentsOf(markets, sessions, random);
+    for (const moment of moments) await writer.write(moment);
     time = now;
+    const correction = await mistypeLastClose(trader, moments.at(-1)?.market, clock);
     // Each entry knows the bars up to its last fill; those since come now.
     for (const { id } of markets)
       await services.onBarsChanged(trader, { underlyingId: id, fromSessionDate: sessions[0]?.date ?? '', prices: [] });
+    if (correction !== null) await correction(services.onBarsChanged);
     await writer.writeDrafts(markets, lastSession);
     return true;
   } finally {
@@ -174,6 +179,41 @@ async function makeMarkets(
     markets.push({ underlying, id, bars });
   }
   return markets;
+}
+
+/** Stores the last close of a market wrongly, for an outcome that changes; gives the correction. */
+async function mistypeLastClose(
+  scope: DeskScope,
+  market: Market | undefined,
+  clock: Clock,
+): Promise<((tell: OnBarsChanged) => Promise<void>) | null> {
+  const bar = market?.bars.at(-1);
+  if (market === undefined || bar === undefined) return null;
+  const store = (close: string) =>
+    new BarStore(scope).write(
+      [
+        {
+          id: systemIds.next(),
+          underlyingId: market.id,
+          ...bar,
+          close,
+          settlement: null,
+          source: 'typed',
+          storedAt: clock.now(),
+        },
+      ],
+      { withSettlement: true },
+    );
+  const { sessionDate, close: after } = bar;
+  // Inside the session's range whatever it was.
+  const before = toDecimalText(toDecimal(bar.low).plus(bar.high).dividedBy(2).toDecimalPlaces(2));
+  if (before === after) return null;
+  await store(before);
+  return async (tell) => {
+    await store(after);
+    const prices = [{ sessionDate, field: 'close', before, after } as const];
+    await tell(scope, { underlyingId: market.id, fromSessionDate: sessionDate, prices });
+  };
 }
 
 type MarketMoment = DemoMoment & { readonly market: Market };

@@ -22,6 +22,10 @@ describe.each(Object.entries(moments))('the demo desk loaded on %s', (_, now) =>
       expect(rows.map(({ state }) => state).sort()).toEqual([...entryStates].sort());
       expect(rows.reduce((sum, { number }) => sum + number, 0)).toBe(41);
       expect(rows.reduce((sum, { late }) => sum + late, 0)).toBeGreaterThan(0);
+      const changed: { number: number }[] = await app.dataSource.query(
+        "SELECT CAST(COUNT(*) AS DOUBLE) AS number FROM outcome_change WHERE JSON_VALUE(cause, '$.prices[0].before') IS NOT NULL",
+      );
+      expect(changed[0]?.number).toBeGreaterThan(0); // the close that was corrected
       expect(await load()).toBe(false);
     } finally {
       await app.stop();
