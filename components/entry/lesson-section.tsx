@@ -56,6 +56,7 @@ function LessonForm({ entry, onDone }: { entry: SealedEntry; onDone: () => void 
         )}
         <View style={{ flexDirection: 'row', gap: 8 }}>
           <Button
+            kind="primary"
             label="Save lesson"
             busy={save.isPending}
             busyLabel="Saving …"

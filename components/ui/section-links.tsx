@@ -72,7 +72,9 @@ function useCurrentSection(sections: readonly Section[]): { current: string; jum
   // A jump near the end of the page cannot bring its heading to the top: what was chosen stays marked until a person scrolls.
   const isJump = useRef(false);
   useEffect(() => {
-    const onScroll = () => {
+    const onScroll = ({ target }: Event) => {
+      // The row of links scrolls too.
+      if (target instanceof Element && target.closest('nav') !== null) return;
       if (isJump.current) {
         isJump.current = false;
         return;
@@ -85,6 +87,10 @@ function useCurrentSection(sections: readonly Section[]): { current: string; jum
     document.addEventListener('scroll', onScroll, { capture: true, passive: true });
     return () => document.removeEventListener('scroll', onScroll, { capture: true });
   }, [sections]);
+  // On a narrow screen the row is longer than what shows of it.
+  useEffect(() => {
+    document.querySelector(`a[href="#${current}"]`)?.scrollIntoView?.({ block: 'nearest', inline: 'nearest' });
+  }, [current]);
   const jumpTo = (anchor: string) => {
     isJump.current = true;
     setCurrent(anchor);
