@@ -25,7 +25,7 @@ const places = ({ number, oneOf, list, decimal }: Draw) =>
       spotPrice: number(50, 150),
       totalDeviation: number(0, 0.3),
       distances: list(4, () => number(-3, 3)),
-      step: decimal(0, 5),
+      strikeStep: decimal(0, 5),
     },
   ]);
 const plan = (draw: Draw): Parameters<typeof makeForecast>[0] => {
