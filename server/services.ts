@@ -65,7 +65,7 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
   const entries = new EntryService({ clock, ids, describer });
   const seals = new SealService({ clock, ids, outcomes });
   const fills = new FillService({ clock, ids, outcomes });
-  const scores = new ScoreService(describer);
+  const scores = new ScoreService();
   const exports = new ExportService({ describer, clock });
   const engine = new EngineService();
   const today = new TodayService({ clock, entries, underlyings, scores });
@@ -78,7 +78,7 @@ export function createServices({ configuration, dataSource, clock, ids }: Surrou
     ...entryHandlers({ entries, seals, fills }),
     ...weeklyReviewHandlers(new WeeklyReviewService({ clock, describer })),
     readToday: ({ scope }) => today.read(scope),
-    readScores: ({ scope }) => scores.read(scope),
+    readScores: ({ scope, query }) => scores.read(scope, query),
     exportJournal: async ({ scope, query }) => exports.journal(scope, query),
     computeCases: ({ person, params, body }) =>
       engine.compute(person.id, { command: params.command, cases: body.cases }),

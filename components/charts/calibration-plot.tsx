@@ -27,6 +27,8 @@ export interface CalibrationPicture {
   /** By stated odds, lowest first. */
   readonly bins: readonly CalibrationBin[];
   readonly curve?: readonly CalibrationPoint[];
+  /** Where the curve of a perfect record would lie; the bins' own ranges when left out. */
+  readonly band?: readonly Pick<CalibrationBin, 'forecast' | 'low' | 'high'>[];
   /** Bins with fewer are drawn open. */
   readonly thinBelow?: number;
   /** Words at the point the sentence above speaks of: "28 of 46 = 61%". */
@@ -83,6 +85,7 @@ function Plot({
   side,
   bins,
   curve = [],
+  band: bandPoints = bins,
   thinBelow,
   callout,
 }: CalibrationPicture & { side: number; thinBelow: number }) {
@@ -90,8 +93,8 @@ function Plot({
   const scales = calibrationScales(side);
   const { x, y } = scales;
   const known = bins.filter(({ forecast, observed }) => Number.isFinite(forecast) && Number.isFinite(observed));
-  const banded = bins.filter(({ low, high }) => Number.isFinite(low) && Number.isFinite(high));
-  const band = area<CalibrationBin>(
+  const banded = bandPoints.filter(({ low, high }) => Number.isFinite(low) && Number.isFinite(high));
+  const band = area<Pick<CalibrationBin, 'forecast' | 'low' | 'high'>>(
     ({ forecast }) => x(forecast),
     ({ low }) => y(low),
     ({ high }) => y(high),

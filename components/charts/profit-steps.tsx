@@ -16,6 +16,7 @@ export interface ProfitStep {
 interface Props {
   /** Mean of the sealed distribution: stands first, on the same scale. */
   readonly expectedMean: number;
+  readonly expectedLabel?: string;
   /** They add up to `realised`. */
   readonly steps: readonly ProfitStep[];
   readonly realised: string;
@@ -27,9 +28,9 @@ const LABEL = 104;
 const AMOUNT = 92;
 
 /** Steps from zero to the realised profit, with the expected mean as an open diamond on the same scale. */
-export function ProfitSteps({ expectedMean, steps, realised, currency }: Props) {
+export function ProfitSteps({ expectedMean, expectedLabel = 'Expected mean', steps, realised, currency }: Props) {
   const rows = [
-    { key: 'expected', label: 'Expected mean', amount: expectedMean, isStrong: true },
+    { key: 'expected', label: expectedLabel, amount: expectedMean, isStrong: true },
     ...steps.map(({ label, amount }) => ({ key: label, label, amount, isStrong: false })),
   ];
   return (

@@ -9,7 +9,7 @@ import { textSizes } from '@/components/ui/theme/metrics';
 import { sansFace } from '@/components/ui/theme/type-face';
 import { useColours } from '@/components/ui/theme/use-theme';
 import { useLayout } from '@/components/ui/use-layout';
-import { type Scores } from '@/shared/scores/score-endpoints';
+import { type Scores } from '@/shared/scores/scores';
 
 const STEP = 30;
 
@@ -19,7 +19,14 @@ export function ResolvedList({ scores }: { scores: Scores }) {
   const isPhone = useLayout().kind === 'phone';
   const [shown, setShown] = useState(STEP);
   return (
-    <Card title="Resolved forecasts" subtitle="Newest first">
+    <Card
+      title="Resolved forecasts"
+      subtitle={
+        scores.resolvedCount > scores.resolved.length
+          ? `The newest ${scores.resolved.length} of ${scores.resolvedCount}`
+          : 'Newest first'
+      }
+    >
       <View style={{ gap: 12 }}>
         <DataTable
           caption="Resolved forecasts"

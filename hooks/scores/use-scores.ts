@@ -1,12 +1,15 @@
-import { queryOptions, useQuery } from '@tanstack/react-query';
+import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
 import { call } from '@/hooks/client/api-client';
 import { scoreEndpoints } from '@/shared/scores/score-endpoints';
+import { type ScoreFilter } from '@/shared/scores/score-filter';
 
-const scoresQuery = () =>
+const scoresQuery = (filter: ScoreFilter) =>
   queryOptions({
-    queryKey: ['scores'],
-    queryFn: ({ signal }) => call(scoreEndpoints.readScores, { signal }),
+    queryKey: ['scores', filter],
+    queryFn: ({ signal }) => call(scoreEndpoints.readScores, { query: filter, signal }),
     staleTime: 30_000,
+    // What was shown stays until the narrowed figures are there.
+    placeholderData: keepPreviousData,
   });
 
-export const useScores = () => useQuery(scoresQuery());
+export const useScores = (filter: ScoreFilter) => useQuery(scoresQuery(filter));

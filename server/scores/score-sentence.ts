@@ -8,11 +8,17 @@ const percent = (fraction: number) => `${Math.round(fraction * 100)}%`;
 /**
  * What calibration says in one plain sentence: the level of odds whose frequency is farthest off, by what chance allows.
  * @param bins of the calibration curve. @param count all scored odds. @param whose of the reader's own odds, or of those they mentor.
+ * @param isSpoken false while the sample rule allows a list only.
  */
 export function scoreSentence(
   bins: readonly CalibrationBin[],
-  { count, whose }: { count: number; whose: 'own' | 'mentored' },
+  { count, whose, isSpoken }: { count: number; whose: 'own' | 'mentored'; isSpoken: boolean },
 ): string {
+  if (!isSpoken) {
+    const head =
+      count === 0 ? 'No odds are resolved' : count === 1 ? '1 odds is resolved' : `${count} odds are resolved`;
+    return `${head}: cannot tell yet. Rates are shown from 20 on; until then, look at each one below.`;
+  }
   const spoken = bins.filter((bin) => bin.count >= FEWEST_IN_BIN);
   const farthest = [...spoken].sort((left, right) => distance(right) - distance(left))[0];
   if (farthest === undefined) return `${count} odds are scored; no level of odds has enough cases to speak of yet.`;

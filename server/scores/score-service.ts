@@ -1,107 +1,87 @@
-import { meanBrierScore, brierScore } from '@/journal/scoring/brier-score';
-import { scoringSummary } from '@/journal/scoring/scoring-summary';
+import { brierScore } from '@/journal/scoring/brier-score';
+import { horizonClasses } from '@/journal/scoring/horizon-class';
+import { toDecimal, toDecimalText } from '@/journal/money/decimal';
 import { type DeskScope } from '@/server/database/desk-scope';
-import { EntryStore } from '@/server/entries/entry-store';
 import { EntryEntity } from '@/server/entries/entry-entity';
-import { type EntryDescriber } from '@/server/entries/describe-entry';
-import { type ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
-import { ScoredOddsStore } from '@/server/outcomes/scored-odds-store';
+import { EntryStore } from '@/server/entries/entry-store';
+import { ScoredOddsEntity } from '@/server/outcomes/scored-odds-entity';
+import { namesOnDesk } from '@/server/people/people-names';
+import { moneyFigures } from '@/server/scores/money-figures';
+import { lateFigures, marketFigures, oddsFigures } from '@/server/scores/odds-figures';
+import { coverageFigures, moveFigures, profitPlaceFigures } from '@/server/scores/place-figures';
+import { processFigures } from '@/server/scores/process-figures';
+import { sampled } from '@/server/scores/sampled';
+import { type ScoredCall } from '@/server/scores/score-clusters';
+import { type EntryColumns, type OddsColumns, ScoreColumns } from '@/server/scores/score-columns';
+import { scoreCuts } from '@/server/scores/score-cuts';
 import { scoreSentence } from '@/server/scores/score-sentence';
-import { type Scores } from '@/shared/scores/score-endpoints';
+import { volatilityFigures } from '@/server/scores/volatility-figures';
+import { UnderlyingStore } from '@/server/underlyings/underlying-store';
+import { type ScoreFilter } from '@/shared/scores/score-filter';
+import { type ListedEntry, type Scores } from '@/shared/scores/scores';
 
 const MOST_LISTED = 500;
 
-/** Whether the odds come true: one's own, or for a mentor those of their traders. */
-export class ScoreService {
-  constructor(private readonly describer: EntryDescriber) {}
+/** Names that rows are shown with. */
+interface Names {
+  readonly underlyings: ReadonlyMap<string, { readonly symbol: string; readonly currency: string }>;
+  readonly people: ReadonlyMap<string, string>;
+}
 
-  async read(scope: DeskScope): Promise<Scores> {
+/** Whether the odds come true and what became of the plans: one's own, or for a mentor those of their traders. */
+export class ScoreService {
+  async read(scope: DeskScope, filter: ScoreFilter = {}): Promise<Scores> {
     const traderIds = await readerOf(scope);
-    const store = new ScoredOddsStore(scope);
-    const [inTime, late, pendingCount] = await Promise.all([
-      store.listResolved(traderIds, { isLateSeal: false }),
-      store.listResolved(traderIds, { isLateSeal: true }),
-      store.countPending(traderIds),
+    const columns = new ScoreColumns(scope, traderIds);
+    const [entries, odds, unanswered, combinations, underlyings, people] = await Promise.all([
+      columns.entries(filter),
+      columns.resolvedOdds(filter),
+      columns.countUnanswered(filter),
+      columns.combinations(),
+      new UnderlyingStore(scope).list(),
+      namesOnDesk(scope),
     ]);
-    const forecasts = inTime.map(({ probability }) => probability);
-    const outcomes = inTime.map(({ happened }) => happened === true);
-    const { sampleRule, scores } = scoringSummary(forecasts, outcomes);
+    const names: Names = { underlyings: new Map(underlyings.map((each) => [each.id, each])), people };
+    const byId = new Map(entries.map((entry) => [entry.entryId, entry]));
+    const calls = odds.flatMap((one): ScoredCall[] => {
+      const entry = byId.get(one.entryId);
+      return entry === undefined ? [] : [{ odds: one, entry }];
+    });
+    const inTime = calls.filter(({ entry }) => !entry.isLateSeal);
+    const judged = entries.filter(({ isLateSeal }) => !isLateSeal);
+    const options = { evenIfFew: filter.evenIfFew === 'yes' };
+    const whose = scope.actor.role === 'mentor' ? 'mentored' : 'own';
+    const report = oddsFigures(inTime, options);
+    const isSpoken = report.odds.sampleRule !== 'list-only';
     return {
-      resolved: await this.describe(scope, [...inTime, ...late].slice(0, MOST_LISTED)),
-      count: inTime.length,
-      lateCount: late.length,
-      pendingCount,
-      sampleRule,
-      summary:
-        scores === null
-          ? null
-          : {
-              meanBrierScore: scores.meanBrierScore,
-              marketMeanBrierScore: marketBrier(inTime),
-              meanLogScore: scores.meanLogScore,
-              baseRate: scores.baseRate,
-              // Nearly every forecast is distinct, so the parts are those of the ten bins.
-              reliability: scores.binned.reliability,
-              resolution: scores.binned.resolution,
-              uncertainty: scores.binned.uncertainty,
-              bins: scores.curve.bins.map(({ forecast, observed, count, consistentLow, consistentHigh }) => ({
-                forecast,
-                observed,
-                count,
-                low: consistentLow,
-                high: consistentHigh,
-              })),
-              curve: scores.curve.points.map(({ probability, observed }) => ({ forecast: probability, observed })),
-              sentence: scoreSentence(scores.curve.bins, {
-                count: inTime.length,
-                whose: scope.actor.role === 'mentor' ? 'mentored' : 'own',
-              }),
-            },
+      whose,
+      sentence: scoreSentence(isSpoken ? report.bins : [], { count: inTime.length, whose, isSpoken }),
+      choices: choicesOf(combinations, names),
+      entryCount: judged.length,
+      pendingCount: unanswered.pending,
+      cannotTellCount: unanswered.cannotTell,
+      odds: report.odds,
+      late: lateFigures(
+        calls.filter(({ entry }) => entry.isLateSeal),
+        options,
+      ),
+      market: marketFigures(inTime, options),
+      moves: moveFigures(judged, options),
+      profits: profitPlaceFigures(judged, options),
+      coverage: coverageFigures(judged, options),
+      volatility: volatilityFigures(judged, options),
+      money: moneyFigures(judged, (id) => names.underlyings.get(id)?.currency ?? 'XXX', options),
+      process: processFigures(judged, options),
+      cuts: scoreCuts(inTime, (id) => names.underlyings.get(id)?.symbol ?? '', options),
+      ...(await listsOf(scope, { entries, calls, names })),
+      resolvedCount: calls.length,
     };
   }
 
   /** How many odds are resolved and how they score, for the short view on Today. */
   async brief(scope: DeskScope): Promise<{ count: number; meanBrierScore: number | null }> {
-    const odds = await new ScoredOddsStore(scope).listResolved(await readerOf(scope), { isLateSeal: false });
-    const { sampleRule } = scoringSummary(
-      odds.map(({ probability }) => probability),
-      odds.map(({ happened }) => happened === true),
-    );
-    const mean =
-      sampleRule === 'list-only'
-        ? null
-        : meanBrierScore(
-            odds.map(({ probability }) => probability),
-            odds.map(({ happened }) => happened === true),
-          );
-    return { count: odds.length, meanBrierScore: mean };
-  }
-
-  private async describe(scope: DeskScope, odds: readonly ScoredOddsEntity[]): Promise<Scores['resolved']> {
-    const ids = [...new Set(odds.map(({ entryId }) => entryId))];
-    const entries =
-      ids.length === 0
-        ? []
-        : await scope.repository(EntryEntity).query('entry').andWhere('entry.id IN (:...ids)', { ids }).getMany();
-    const rows = new Map((await this.describer.rows(scope, entries)).map((row) => [row.id, row]));
-    return odds.map((item) => {
-      const row = rows.get(item.entryId);
-      const happened = item.happened === true;
-      return {
-        entryId: item.entryId,
-        symbol: row?.underlying.symbol ?? '',
-        structureName: row?.structureName ?? '',
-        traderName: row?.trader.displayName ?? '',
-        key: item.oddsKey,
-        statement: item.statement,
-        dueSessionDate: item.dueSessionDate,
-        probability: item.probability,
-        marketImplied: item.marketImplied,
-        happened,
-        brierScore: brierScore(item.probability, happened),
-        isLateSeal: item.isLateSeal,
-      };
-    });
+    const { count, meanBrierScore } = await new ScoreColumns(scope, await readerOf(scope)).brief();
+    return { count, meanBrierScore: sampled(count, { evenIfFew: false }, () => meanBrierScore).figures };
   }
 }
 
@@ -110,13 +90,98 @@ async function readerOf(scope: DeskScope): Promise<string[]> {
   return scope.actor.role === 'mentor' ? new EntryStore(scope).mentoredTraderIds() : [scope.actor.personId];
 }
 
-function marketBrier(odds: readonly ScoredOddsEntity[]): number | null {
-  const stated = odds.flatMap(({ marketImplied, happened }) =>
-    marketImplied === null ? [] : [{ marketImplied, happened: happened === true }],
-  );
-  if (stated.length === 0) return null;
-  return meanBrierScore(
-    stated.map(({ marketImplied }) => marketImplied),
-    stated.map(({ happened }) => happened),
-  );
+function choicesOf(
+  combinations: Awaited<ReturnType<ScoreColumns['combinations']>>,
+  { underlyings, people }: Names,
+): Scores['choices'] {
+  const distinct = (values: readonly string[]) =>
+    [...new Set(values)].sort((one, other) => one.localeCompare(other, 'en'));
+  const held = new Set(combinations.map(({ horizonClass }) => horizonClass));
+  return {
+    traders: distinct(combinations.map(({ traderId }) => traderId)).map((id) => ({
+      id,
+      displayName: people.get(id) ?? 'former member',
+    })),
+    underlyings: distinct(combinations.map(({ underlyingId }) => underlyingId))
+      .map((id) => ({ id, symbol: underlyings.get(id)?.symbol ?? '' }))
+      .sort((one, other) => one.symbol.localeCompare(other.symbol, 'en')),
+    structureKinds: distinct(combinations.map(({ structureKind }) => structureKind)),
+    horizonClasses: horizonClasses.filter((name) => held.has(name)),
+    tags: distinct(combinations.flatMap(({ tags }) => tags)),
+  };
+}
+
+interface Listed {
+  readonly entries: readonly EntryColumns[];
+  readonly calls: readonly ScoredCall[];
+  readonly names: Names;
+}
+
+/** The newest rows behind the figures, with the words that only lists need. */
+async function listsOf(
+  scope: DeskScope,
+  { entries, calls, names }: Listed,
+): Promise<Pick<Scores, 'resolved' | 'entries'>> {
+  const newestCalls = calls.slice(-MOST_LISTED).reverse();
+  const newestEntries = entries.slice(-MOST_LISTED).reverse();
+  const ids = [...new Set([...newestEntries, ...newestCalls.map(({ entry }) => entry)].map(({ entryId }) => entryId))];
+  const [structures, statements] = await Promise.all([structureNames(scope, ids), statementsOf(scope, newestCalls)]);
+  const shown = (entry: EntryColumns) => ({
+    entryId: entry.entryId,
+    symbol: names.underlyings.get(entry.underlyingId)?.symbol ?? '',
+    structureName: structures.get(entry.entryId) ?? entry.structureKind,
+    traderName: names.people.get(entry.traderId) ?? 'former member',
+    isLateSeal: entry.isLateSeal,
+  });
+  return {
+    resolved: newestCalls.map(({ entry, odds }) => ({
+      ...shown(entry),
+      key: odds.oddsKey,
+      statement: statements.get(statementKey(odds)) ?? '',
+      dueSessionDate: odds.dueSessionDate,
+      probability: odds.probability,
+      marketImplied: odds.marketImplied,
+      happened: odds.happened,
+      brierScore: brierScore(odds.probability, odds.happened),
+    })),
+    entries: newestEntries.map((entry): ListedEntry => ({
+      ...shown(entry),
+      currency: names.underlyings.get(entry.underlyingId)?.currency ?? 'XXX',
+      exitSessionDate: entry.exitSessionDate,
+      volatilityMethod: entry.volatilityMethod,
+      moveDeviations: entry.moveDeviations,
+      movePlace: entry.movePlace,
+      volatilityRatio: entry.volatilityRatio,
+      profitPlaceLow: entry.profitPlaceLow,
+      profitPlaceHigh: entry.profitPlaceHigh,
+      expectedMean: entry.expectedMean,
+      realisedProfit: entry.realisedProfit === null ? null : toDecimalText(toDecimal(entry.realisedProfit)),
+      isFollowed: entry.isFollowed,
+      exitTag: entry.exitTag,
+    })),
+  };
+}
+
+async function structureNames(scope: DeskScope, ids: readonly string[]): Promise<Map<string, string>> {
+  if (ids.length === 0) return new Map();
+  const rows = await scope
+    .repository(EntryEntity)
+    .query('entry')
+    .andWhere('entry.id IN (:...ids)', { ids })
+    .select(['entry.id AS id', 'entry.structureName AS name'])
+    .getRawMany<{ id: string; name: string }>();
+  return new Map(rows.map(({ id, name }) => [id, name]));
+}
+
+const statementKey = ({ entryId, oddsKey }: Pick<OddsColumns, 'entryId' | 'oddsKey'>) => `${entryId} ${oddsKey}`;
+
+async function statementsOf(scope: DeskScope, calls: readonly ScoredCall[]): Promise<Map<string, string>> {
+  if (calls.length === 0) return new Map();
+  const rows = await scope
+    .repository(ScoredOddsEntity)
+    .query('odds')
+    .andWhere('odds.entryId IN (:...ids)', { ids: [...new Set(calls.map(({ odds }) => odds.entryId))] })
+    .select(['odds.entryId AS entryId', 'odds.oddsKey AS oddsKey', 'odds.statement AS statement'])
+    .getRawMany<{ entryId: string; oddsKey: string; statement: string }>();
+  return new Map(rows.map((row) => [statementKey(row), row.statement]));
 }

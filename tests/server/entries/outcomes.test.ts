@@ -43,7 +43,7 @@ describe('an outcome', () => {
     const waiting = await entryOf(trader, id);
     expect(waiting.outcome).toMatchObject({ isComplete: false, move: null, moveSoFar: { sessionDate: '2026-12-17' } });
     expect(waiting.outcome?.odds.every(({ brierScore }) => brierScore === null)).toBe(true);
-    expect((await trader.get('/scores').expect(200)).body).toMatchObject({ count: 0, resolved: [] });
+    expect((await trader.get('/scores').expect(200)).body).toMatchObject({ odds: { count: 0 }, resolved: [] });
 
     await putBar(trader, { underlyingId, date: expiry, close: '98.9' });
     const { outcome, row } = await entryOf(trader, id);
@@ -62,12 +62,14 @@ describe('an outcome', () => {
 
     const { body: scores } = await trader.get('/scores').expect(200);
     expect(scores).toMatchObject({
-      count: outcome?.odds.length,
-      lateCount: 0,
+      odds: { count: outcome?.odds.length, sampleRule: 'list-only', figures: null },
+      late: { count: 0 },
       pendingCount: 0,
-      sampleRule: 'list-only',
-      summary: null,
+      moves: { count: 1 },
     });
+    expect(scores.entries).toMatchObject([
+      { entryId: id, moveDeviations: outcome?.move?.inSigmas, volatilityMethod: 'typed', realisedProfit: null },
+    ]);
     expect(scores.resolved[0]).toMatchObject({ entryId: id, symbol: 'HVYQ', isLateSeal: false });
     const { body: today } = await trader.get('/today').expect(200);
     expect(today).toMatchObject({
@@ -121,8 +123,8 @@ describe('an outcome', () => {
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
     for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
     const { body } = await trader.get('/scores').expect(200);
-    expect(body).toMatchObject({ count: 0 });
-    expect(body.lateCount).toBeGreaterThan(0);
+    expect(body.odds.count).toBe(0);
+    expect(body.late.count).toBeGreaterThan(0);
   });
 
   it('is still scored for a plan that was given up', async () => {
@@ -132,7 +134,7 @@ describe('an outcome', () => {
     await before.post(`/entries/${id}/abandon`).set('If-Match', '2').expect(200);
     const trader = await comeBack(app, before, '2026-12-18T22:00:00.000Z');
     for (const date of sessionsToExpiry) await putBar(trader, { underlyingId, date, close: '98' });
-    expect((await trader.get('/scores').expect(200)).body.count).toBeGreaterThan(0);
+    expect((await trader.get('/scores').expect(200)).body.odds.count).toBeGreaterThan(0);
   });
 });
 

@@ -11,7 +11,7 @@ const bin = (changes: Partial<CalibrationBin>): CalibrationBin => ({
   consistentHigh: 0.82,
   ...changes,
 });
-const own = { count: 80, whose: 'own' } as const;
+const own = { count: 80, whose: 'own', isSpoken: true } as const;
 
 describe('the sentence over the scores', () => {
   it('says that a level lies within chance', () => {
