@@ -58,7 +58,7 @@ export function CutsCard({ scores, filter, onFilter }: Props) {
               { key: 'n', header: 'n', align: 'right', flex: 0.7 },
               ...(isPhone ? [] : [{ key: 'effective', header: 'Counts for', align: 'right' as const }]),
               ...(isPhone ? [] : [{ key: 'stated', header: 'Stated', align: 'right' as const }]),
-              { key: 'came', header: 'Came true', align: 'right', flex: 1.3 },
+              { key: 'came', header: 'Came true', align: 'right', flex: 1.7 },
               { key: 'brier', header: 'Brier', align: 'right', flex: 0.9 },
             ]}
             rows={cuts.map((cut) => ({

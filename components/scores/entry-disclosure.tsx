@@ -1,13 +1,10 @@
-import { Link } from 'expo-router';
 import { useId, useState } from 'react';
 import { View } from 'react-native';
+import { EntryLink } from '@/components/scores/entry-link';
 import { entriesWord } from '@/components/scores/score-words';
 import { Button } from '@/components/ui/button';
 import { formatDate } from '@/components/ui/number-format';
 import { DataTable, type TableRow } from '@/components/ui/table';
-import { textSizes } from '@/components/ui/theme/metrics';
-import { sansFace } from '@/components/ui/theme/type-face';
-import { useColours } from '@/components/ui/theme/use-theme';
 import { type ListedEntry } from '@/shared/scores/scores';
 
 const STEP = 50;
@@ -24,7 +21,6 @@ interface Props {
 
 /** The entries behind a figure, opened under it. */
 export function EntryDisclosure({ what, entries, header, figureOf }: Props) {
-  const colours = useColours();
   const [isOpen, setIsOpen] = useState(false);
   const [shown, setShown] = useState(STEP);
   const id = useId();
@@ -53,19 +49,7 @@ export function EntryDisclosure({ what, entries, header, figureOf }: Props) {
             rows={entries.slice(0, shown).map((entry) => ({
               key: entry.entryId,
               cells: {
-                entry: (
-                  <Link
-                    href={{ pathname: '/journal/[entryId]', params: { entryId: entry.entryId } }}
-                    style={{
-                      ...sansFace('regular'),
-                      fontSize: textSizes.row.fontSize,
-                      color: colours.bramble,
-                      textDecorationLine: 'underline',
-                    }}
-                  >
-                    {`${entry.symbol} ${entry.structureName}`}
-                  </Link>
-                ),
+                entry: <EntryLink entryId={entry.entryId} text={`${entry.symbol} ${entry.structureName}`} />,
                 exit: formatDate(entry.exitSessionDate),
                 figure: figureOf(entry),
               },

@@ -1,13 +1,10 @@
-import { Link } from 'expo-router';
 import { useState } from 'react';
 import { View } from 'react-native';
+import { EntryLink } from '@/components/scores/entry-link';
 import { Button } from '@/components/ui/button';
 import { Card } from '@/components/ui/card';
 import { formatDate, formatOdds } from '@/components/ui/number-format';
 import { DataTable } from '@/components/ui/table';
-import { textSizes } from '@/components/ui/theme/metrics';
-import { sansFace } from '@/components/ui/theme/type-face';
-import { useColours } from '@/components/ui/theme/use-theme';
 import { useLayout } from '@/components/ui/use-layout';
 import { type Scores } from '@/shared/scores/scores';
 
@@ -15,7 +12,6 @@ const STEP = 30;
 
 /** Every resolved forecast, each leading to its entry. */
 export function ResolvedList({ scores }: { scores: Scores }) {
-  const colours = useColours();
   const isPhone = useLayout().kind === 'phone';
   const [shown, setShown] = useState(STEP);
   return (
@@ -42,17 +38,7 @@ export function ResolvedList({ scores }: { scores: Scores }) {
             key: `${item.entryId} ${item.key}`,
             cells: {
               what: (
-                <Link
-                  href={{ pathname: '/journal/[entryId]', params: { entryId: item.entryId } }}
-                  style={{
-                    ...sansFace('regular'),
-                    fontSize: textSizes.row.fontSize,
-                    color: colours.bramble,
-                    textDecorationLine: 'underline',
-                  }}
-                >
-                  {`${item.symbol} ${item.structureName}: ${item.statement}`}
-                </Link>
+                <EntryLink entryId={item.entryId} text={`${item.symbol} ${item.structureName}: ${item.statement}`} />
               ),
               due: formatDate(item.dueSessionDate, 'withYear'),
               said: formatOdds(item.probability),

@@ -90,11 +90,18 @@ export function ScoreFilters({ filter, choices, onFilter }: Props) {
           />
         </View>
       ))}
-      <View style={cell}>
-        <DateField label="Exit from" value={filter.from ?? ''} max={filter.to} onChange={(from) => change({ from })} />
-      </View>
-      <View style={cell}>
-        <DateField label="Exit to" value={filter.to ?? ''} min={filter.from} onChange={(to) => change({ to })} />
+      <View style={{ flexDirection: 'row', gap: 8, ...(isPhone ? { width: '100%' } : { width: 360, flexGrow: 2 }) }}>
+        <View style={{ flex: 1, minWidth: 0 }}>
+          <DateField
+            label="Exit from"
+            value={filter.from ?? ''}
+            max={filter.to}
+            onChange={(from) => change({ from })}
+          />
+        </View>
+        <View style={{ flex: 1, minWidth: 0 }}>
+          <DateField label="Exit to" value={filter.to ?? ''} min={filter.from} onChange={(to) => change({ to })} />
+        </View>
       </View>
       {isNarrowed ? <Button kind="secondary" label="Show all" onPress={() => onFilter({})} /> : null}
     </View>
