@@ -57,6 +57,9 @@ export function expiryPayoff({ legs, shares = 0, cost }: PayoffQuestion): Expiry
     }
     return { from, to, intercept, slope };
   });
+  // Amounts that overflow together would make the pay-off the difference of two infinities.
+  const isWithin = segments.every(({ from, intercept, slope }) => Number.isFinite(intercept + slope * from));
+  if (!isWithin) throw new DomainError('payoff-input-invalid', { cost, shares, legs: legs.length });
   const last = segments[segments.length - 1];
   const corners = segments.map((segment) => segment.intercept + segment.slope * segment.from);
   const finalSlope = last?.slope ?? 0;

@@ -2,7 +2,7 @@ import { bracketedRoot } from '@/journal/forecast/bracketed-root';
 import { normalNodes, normalWeighted, type PriceBend } from '@/journal/forecast/normal-quadrature';
 import { probabilityBetween, tailsAt } from '@/journal/forecast/normal-tails';
 import { monotonePieces, type MonotonePiece } from '@/journal/forecast/monotone-pieces';
-import { joinRanges, type LognormalPrice, type ProfitLaw } from '@/journal/forecast/profit-law';
+import { checkLognormalPrice, joinRanges, type LognormalPrice, type ProfitLaw } from '@/journal/forecast/profit-law';
 
 /** A profit that bends with the price of the underlying, as it does before expiry. */
 export interface ProfitCurve {
@@ -28,9 +28,11 @@ const ROOT_TOLERANCE = 1e-14;
  * @param curve see {@link ProfitCurve}; `price` totalDeviation above 0.
  * @returns probabilities to about 1e-12, quantiles to the rounding of the profit, expected shortfall to about 1e-8 of it; no
  *   lumps but that of a profit that is the same everywhere. A pair of turns that both fall between two nodes is not seen.
+ * @throws {DomainError} `price-law-invalid`.
  * @see as profitLaw; turning points: golden section, Kiefer (1953), Proc. AMS 4.
  */
 export function curvedProfitLaw(curve: ProfitCurve, price: LognormalPrice): ProfitLaw {
+  checkLognormalPrice(price);
   const { resolution, limits } = curve;
   const priceOf = (standard: number) => price.spotPrice * Math.exp(price.logDrift + price.totalDeviation * standard);
   const profitOf = (standard: number) => curve.profitAt(priceOf(standard));

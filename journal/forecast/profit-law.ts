@@ -1,4 +1,5 @@
 import { type PayoffSegment } from '@/journal/contracts/expiry-payoff';
+import { DomainError } from '@/journal/errors/domain-error';
 import { type NormalTails, probabilityBetween, tailsAt } from '@/journal/forecast/normal-tails';
 
 /** A lognormal price: ln S has mean ln(spot) + logDrift and standard deviation totalDeviation. */
@@ -37,15 +38,28 @@ export interface PriceRange {
 }
 
 const NEGLIGIBLE = 1e-15;
+/** Beyond e^600 the squares of prices leave the doubles. */
+const FARTHEST_LOG_PRICE = 600;
+const DEVIATIONS_IN_REACH = 10;
+
+/** @throws {DomainError} `price-law-invalid` where the spot is not above 0, the deviation not above 0, or prices leave the doubles. */
+export function checkLognormalPrice({ spotPrice, logDrift, totalDeviation }: LognormalPrice): void {
+  const reach =
+    Math.abs(Math.log(spotPrice)) + Math.abs(logDrift) + totalDeviation * (DEVIATIONS_IN_REACH + totalDeviation);
+  if (!(spotPrice > 0 && totalDeviation > 0 && reach < FARTHEST_LOG_PRICE))
+    throw new DomainError('price-law-invalid', { spotPrice, logDrift, totalDeviation });
+}
 
 /**
  * Distribution of a profit that is a piecewise linear function of a lognormal price.
  * @param segments cover (0, ∞) without gaps, lowest first.
  * @returns every figure in closed form from the normal distribution, but quantiles, which are searched to 1e-10 of the range.
+ * @throws {DomainError} `price-law-invalid`.
  * @see partial expectations of the lognormal distribution as in Black and Scholes (1973); expected shortfall: Acerbi and
  *   Tasche (2002), J. Banking and Finance 26.
  */
 export function profitLaw(segments: readonly PayoffSegment[], price: LognormalPrice): ProfitLaw {
+  checkLognormalPrice(price);
   const weighed = weigh(segments, price);
   const cumulative = (amount: number, includesAmount: boolean) => {
     let sum = 0;

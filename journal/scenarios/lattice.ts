@@ -1,4 +1,5 @@
 import { normalCumulative } from '@/journal/distributions/normal-distribution';
+import { DomainError } from '@/journal/errors/domain-error';
 import { type RepricedLeg, valueAtMoment } from '@/journal/scenarios/reprice';
 
 export interface LatticeQuestion {
@@ -31,9 +32,11 @@ export interface LatticeGrid {
  * Profit by move of the underlying and sessions elapsed, every cell repriced in full.
  * Calendar time is taken to pass evenly with the sessions. The likelihood of a cell is that of the moves nearer to its row
  * than to any other, of a driftless log price; at the start all of it is on the row of no move.
+ * @throws {DomainError} `lattice-input-invalid`; `reprice-input-invalid` with the leg's index.
  * @see Taleb (1997), Dynamic Hedging, on repricing instead of Greeks near expiry; common practice.
  */
 export function latticeGrid(question: LatticeQuestion): LatticeGrid {
+  checkLattice(question);
   const { sigmas, spotPrice, holdDeviation, sessionsElapsed, sessionsToExpiry, yearsToExpiry, costToOpen } = question;
   const prices = sigmas.map((sigma) => spotPrice * Math.exp(sigma * holdDeviation));
   const columns = sessionsElapsed.map((elapsed) => {
@@ -53,6 +56,25 @@ export function latticeGrid(question: LatticeQuestion): LatticeGrid {
   const turned = (values: readonly (readonly number[])[]) =>
     sigmas.map((_, row) => values.map((column) => column[row] ?? 0));
   return { prices, profit: turned(columns), likelihood: turned(likelihoods) };
+}
+
+const FARTHEST_LOG_PRICE = 600;
+
+function checkLattice(question: LatticeQuestion): void {
+  const { sigmas, spotPrice, holdDeviation, dailyVolatility, sessionsElapsed, costToOpen } = question;
+  const farthest = sigmas.reduce((most, sigma) => Math.max(most, Math.abs(sigma)), 0) * holdDeviation;
+  const isValid =
+    holdDeviation >= 0 &&
+    Math.abs(Math.log(spotPrice)) + farthest < FARTHEST_LOG_PRICE &&
+    dailyVolatility >= 0 &&
+    dailyVolatility < Infinity &&
+    sessionsElapsed.every((elapsed) => elapsed >= 0 && elapsed < Infinity) &&
+    question.sessionsToExpiry >= 0 &&
+    question.sessionsToExpiry < Infinity &&
+    question.yearsToExpiry >= 0 &&
+    Math.abs(costToOpen) < Infinity;
+  if (!isValid)
+    throw new DomainError('lattice-input-invalid', { spotPrice, holdDeviation, dailyVolatility, costToOpen });
 }
 
 /** Chance of each row: of the moves between the halfway points to its neighbours, with `scale` deviations a sigma. */

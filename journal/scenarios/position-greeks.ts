@@ -1,3 +1,4 @@
+import { DomainError } from '@/journal/errors/domain-error';
 import { europeanOptionValue } from '@/journal/pricing/european-option';
 import { type RepricedLeg, type RepriceMoment } from '@/journal/scenarios/reprice';
 
@@ -23,7 +24,7 @@ const SESSIONS_PER_YEAR = 252;
  * Greeks of options and shares in the units they are traded in, summed over legs.
  * @param question.moment what is left to the first expiry; `shares` held beside the options; `yearsPerNextSession` calendar years
  *   that pass over the next session; `sessionsPerYear` the convention of annual points, 252 by default.
- * @throws {DomainError} `option-input-invalid`.
+ * @throws {DomainError} `option-input-invalid`; `position-invalid` where sizes are not finite.
  * @see europeanOptionValue; units: common practice.
  */
 export function positionGreeks(question: {
@@ -56,6 +57,8 @@ export function positionGreeks(question: {
     vegaPerDailyPoint += signedShares * greeks.vegaPerDailyPoint;
     rhoPerPercent += signedShares * greeks.rhoPerPercent;
   }
+  const sum = shareEquivalent + gamma + thetaNextSession + vegaPerDailyPoint + rhoPerPercent;
+  if (!Number.isFinite(sum)) throw new DomainError('position-invalid', { shares, legs: legs.length });
   return {
     shareEquivalent,
     gammaPerPercent: gamma * spotPrice * 0.01,

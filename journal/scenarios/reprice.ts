@@ -1,3 +1,4 @@
+import { DomainError } from '@/journal/errors/domain-error';
 import { outOfTheMoneyPrice } from '@/journal/pricing/out-of-the-money';
 
 /** A leg with the volatility it is repriced at. */
@@ -27,6 +28,7 @@ export interface RepriceMoment {
  * out once, since lattices and exit distributions ask for hundreds of prices.
  * @param shares of the underlying held beside the options, negative when short.
  * @returns currency, positive when the position is worth something to its owner.
+ * @throws {DomainError} `reprice-input-invalid` with the leg's index.
  * @see Black and Scholes (1973), Merton (1973), repriced in full.
  */
 export function valueAtMoment(
@@ -34,13 +36,14 @@ export function valueAtMoment(
   moment: RepriceMoment,
   shares = 0,
 ): (spotPrice: number) => number {
-  const prepared = legs.map((leg) => {
+  const prepared = legs.map((leg, legIndex) => {
+    checkLeg(leg, moment, legIndex);
     const years = moment.years + (leg.yearsBeyond ?? 0);
     return {
       direction: leg.type === 'call' ? 1 : -1,
       carry: Math.exp(-moment.dividendYield * years),
       presentStrike: leg.strikePrice * Math.exp(-moment.ratePerYear * years),
-      totalDeviation: leg.dailyVolatility * Math.sqrt(moment.sessions + (leg.sessionsBeyond ?? 0)),
+      totalDeviation: leg.dailyVolatility * Math.sqrt(moment.sessions + (leg.sessionsBeyond ?? 0)) + 0, // never -0
       signedShares: leg.signedShares,
     };
   });
@@ -54,4 +57,22 @@ export function valueAtMoment(
     }
     return value;
   };
+}
+
+function checkLeg(leg: RepricedLeg, moment: RepriceMoment, legIndex: number): void {
+  const { strikePrice, signedShares, dailyVolatility } = leg;
+  const years = moment.years + (leg.yearsBeyond ?? 0);
+  const sessions = moment.sessions + (leg.sessionsBeyond ?? 0);
+  const growth = Math.exp((Math.abs(moment.ratePerYear) + Math.abs(moment.dividendYield)) * years);
+  const isValid = strikePrice > 0 && dailyVolatility >= 0 && years >= 0 && sessions >= 0;
+  const size = strikePrice * growth * Math.abs(signedShares) + dailyVolatility * Math.sqrt(sessions);
+  if (!(isValid && growth < Infinity && size < Infinity))
+    throw new DomainError('reprice-input-invalid', {
+      legIndex,
+      strikePrice,
+      signedShares,
+      dailyVolatility,
+      years,
+      sessions,
+    });
 }
