@@ -59,7 +59,7 @@ export const callsOfVolatility: Readonly<Record<string, Prepared>> = {
   ),
   bootstrapVolatilityInterval: given(
     returns,
-    (series) => bootstrapVolatilityInterval(series, { seed: 1, resamples: 100 }),
+    (series) => bootstrapVolatilityInterval(series, { mean: 'sample', seed: 1, resamples: 100 }),
     10,
   ),
   normalFit: given(returns, (series) => normalFit(series)),

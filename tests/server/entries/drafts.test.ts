@@ -72,8 +72,8 @@ describe('a draft', () => {
     await save(id, 1, completePlan(foreign)).expect(404);
   });
 
-  it('is won by exactly one of two edits at once, thirty times, and the winner’s text stands', async () => {
-    for (let round = 0; round < 30; round += 1) {
+  it('is won by exactly one of two edits at once, a hundred times, and the winner’s text stands', async () => {
+    for (let round = 0; round < 100; round += 1) {
       const id = await addDraft(trader, plan());
       const [left, right] = await Promise.all([
         save(id, 1, plan({ idea: 'left', exitRule: 'left' })),
