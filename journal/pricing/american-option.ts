@@ -39,12 +39,14 @@ export const fineScheme: BoundaryScheme = { intervals: 10, quadrature: 16, itera
 /** Rates over the life, and deviations of it, beyond which no market lies and no scheme was measured. */
 const LARGEST_RATE = 20;
 const LARGEST_DEVIATION = 20;
+/** Of prices and their ratio, and its inverse the least: squares of them stay in the doubles. */
+const LARGEST_PRICE = 1e150;
 const ONE_DAY_IN_YEARS = 1 / 365;
 
 /**
  * Price of an American option. Variance runs by sessions and money by years: between now and expiry both are taken to pass in step.
  * @param option see {@link AmericanOption}; all of it finite, prices above 0, volatility, sessions and years 0 or more. Rates times
- *   years and the deviation over the life up to 20 in size.
+ *   years and the deviation over the life up to 20 in size, prices and their ratio from 1e-150 to 1e150.
  * @param scheme of the boundary, where it has one edge and there are no dividends.
  * @returns currency per share, at least what exercising brings. Within 2e-5 of the spot price with dividends.
  * @throws {DomainError} `option-input-invalid` naming the field; `american-out-of-range`; with dividends as escrowedSpot.
@@ -134,9 +136,16 @@ function checked(option: AmericanOption): PlainOption {
   const interest = option.ratePerYear * years;
   const yieldOverLife = option.dividendYield * years;
   const deviation = dailyVolatility * Math.sqrt(sessions);
+  const areWithin = [spotPrice, strikePrice, spotPrice / strikePrice].every(
+    (price) => price >= 1 / LARGEST_PRICE && price <= LARGEST_PRICE,
+  );
   const isWithin =
-    Math.abs(interest) <= LARGEST_RATE && Math.abs(yieldOverLife) <= LARGEST_RATE && deviation <= LARGEST_DEVIATION;
-  if (!isWithin) throw new DomainError('american-out-of-range', { interest, yieldOverLife, deviation });
+    areWithin &&
+    Math.abs(interest) <= LARGEST_RATE &&
+    Math.abs(yieldOverLife) <= LARGEST_RATE &&
+    deviation <= LARGEST_DEVIATION;
+  if (!isWithin)
+    throw new DomainError('american-out-of-range', { spotPrice, strikePrice, interest, yieldOverLife, deviation });
   const dividends = dividendsOfLife(option);
   const plain = { type, spotPrice, strikePrice, interest, yieldOverLife, deviation, dividends, model: dividendModel };
   return { ...plain, kind: kindOf(plain) };

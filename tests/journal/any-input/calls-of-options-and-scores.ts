@@ -1,5 +1,10 @@
+import { touchOddsAtCloses } from '@/journal/odds/monitored-at-closes';
 import { oddsBeyondLevel } from '@/journal/odds/odds-beyond-level';
+import { studentOddsBeyondLevel } from '@/journal/odds/student-odds';
+import { touchFirstOdds } from '@/journal/odds/touch-first-odds';
 import { touchOdds } from '@/journal/odds/touch-odds';
+import { americanImpliedVolatility } from '@/journal/pricing/american-implied-volatility';
+import { americanOptionPrice, americanOptionValue } from '@/journal/pricing/american-option';
 import { europeanOptionPrice, europeanOptionValue } from '@/journal/pricing/european-option';
 import { impliedDailyVolatility } from '@/journal/pricing/implied-daily-volatility';
 import { bandCoverage } from '@/journal/scoring/band-coverage';
@@ -51,7 +56,37 @@ export const callsOfOptionsAndScores: Readonly<Record<string, Prepared>> = {
   europeanOptionPrice: given(option, europeanOptionPrice),
   europeanOptionValue: given(option, europeanOptionValue),
   impliedDailyVolatility: given((draw) => ({ ...option(draw), price: draw.number(0, 60) }), impliedDailyVolatility),
+  americanOptionValue: given(option, (one) => americanOptionValue(one), 20),
+  'americanOptionPrice with dividends': given(
+    (draw) => ({
+      ...option(draw),
+      dividends: draw.list(3, () => ({ years: draw.number(0, 0.2), amount: draw.number(0, 3) })),
+      dividendModel: draw.oneOf(['spot', 'escrowed'] as const),
+    }),
+    (one) => americanOptionPrice(one),
+    200,
+  ),
+  americanImpliedVolatility: given(
+    (draw) => ({ ...option(draw), price: draw.number(0, 60) }),
+    americanImpliedVolatility,
+    50,
+  ),
   oddsBeyondLevel: given(levelQuestion, oddsBeyondLevel),
+  touchOddsAtCloses: given((draw) => ({ ...levelQuestion(draw), closes: draw.whole(1, 30) }), touchOddsAtCloses),
+  studentOddsBeyondLevel: given(
+    (draw) => ({ ...levelQuestion(draw), returns: draw.whole(2, 60) }),
+    studentOddsBeyondLevel,
+  ),
+  touchFirstOdds: given(
+    ({ number }) => ({
+      spotPrice: number(90, 110),
+      lowerLevel: number(50, 90),
+      upperLevel: number(110, 150),
+      totalDeviation: number(0, 0.5),
+      logDrift: number(-0.1, 0.1),
+    }),
+    touchFirstOdds,
+  ),
   touchOdds: given(levelQuestion, touchOdds),
   sessionsBetween: given(
     (draw) => ({ from: draw.instant(), to: draw.instant(), overnightShare: draw.number(0, 1) }),
