@@ -293,10 +293,12 @@ class DemoWriter {
     const [entryBar] = after;
     if (entryBar === undefined) return;
     const opensAt = usOptionsCalendar.sessionOn(entryBar.sessionDate)?.opensAt ?? moment.closesAt;
+    // Most wait for their price; some pay up.
+    const slippage = random.next() < 0.65 ? 0 : 0.01;
     for (const leg of demo.plan.legs)
       await this.fill(entryId, moment, leg, {
         kind: leg.side,
-        price: worse(leg, 0.01),
+        price: worse(leg, slippage),
         at: later(opensAt, 22),
         underlyingPrice: moment.close.toFixed(2),
       });

@@ -29,7 +29,7 @@ describe('reliabilityBand', () => {
   it('shows 200 points of many forecasts, the first and the last among them', () => {
     const forecasts = Array.from({ length: 5000 }, (_, index) => index / 4999);
     const { points, resamples } = reliabilityBand(forecasts, { seed });
-    expect(resamples).toBe(400);
+    expect(resamples).toBe(100);
     expect(points).toHaveLength(200);
     expect([points[0]?.probability, points.at(-1)?.probability]).toEqual([0, 1]);
   });
