@@ -4,6 +4,7 @@ import { type AddressInfo } from 'node:net';
 import path from 'node:path';
 import jstat from 'jstat';
 import { type Browser, type Locator, type Page } from 'playwright-core';
+import { engineVersion } from '@/journal/forecast/engine-version';
 import { underlyingEndpoints } from '@/shared/underlyings/underlying-endpoints';
 import { accessibilityViolations, launchBrowser, openPage, sizes, type WatchedPage } from '@/tests/e2e/support/browser';
 import { csvOf, publishedCloses, sessionDatesAfter, sessionDatesEnding } from '@/tests/e2e/support/index-series';
@@ -202,7 +203,7 @@ describe.each(Object.entries(sizes))('the main job on a %s screen', (size, viewp
     await page.getByRole('button', { name: 'Seal forecast' }).click();
     await page.getByRole('dialog').getByRole('button', { name: 'Seal forecast' }).click();
     await page.getByRole('heading', { name: 'ZZIX long 1540 call', level: 1 }).waitFor();
-    await page.getByText('Seal 1, engine 1').waitFor();
+    await page.getByText(`Seal 1, engine ${engineVersion}`).waitFor();
     await isClean();
   });
 
