@@ -1,5 +1,6 @@
 import { setTimeout as pause } from 'node:timers/promises';
-import { type DataSource, type EntityManager, QueryFailedError } from 'typeorm';
+import { type PoolConnection } from 'mysql2';
+import { type DataSource, type EntityManager, QueryFailedError, type QueryRunner } from 'typeorm';
 
 /** Deadlock, lock wait timeout, and a row changed since the snapshot: the same work may succeed when it is done again. */
 const worthRepeating = new Set([1213, 1205, 1020]);
@@ -15,11 +16,41 @@ export async function inTransaction<T>(
 ): Promise<T> {
   for (let attempt = 1; ; attempt += 1) {
     try {
-      return await dataSource.transaction(work);
+      return await tryOnce(dataSource, work);
     } catch (error) {
       if (attempt >= MOST_TRIES || !isWorthRepeating(error)) throw error;
       await pause(spread(attempt));
     }
+  }
+}
+
+async function tryOnce<T>(dataSource: DataSource, work: (manager: EntityManager) => Promise<T>): Promise<T> {
+  const runner = dataSource.createQueryRunner();
+  try {
+    await runner.startTransaction();
+    const result = await work(runner.manager);
+    await runner.commitTransaction();
+    return result;
+  } catch (error) {
+    await undo(runner);
+    throw error;
+  } finally {
+    await runner.release();
+  }
+}
+
+/**
+ * A connection that did not roll back may still be inside the transaction, and whoever got it next would commit what it
+ * holds: it is ended, and the database undoes the rest.
+ */
+async function undo(runner: QueryRunner): Promise<void> {
+  try {
+    await runner.rollbackTransaction();
+  } catch {
+    await runner.connect().then(
+      (connection: PoolConnection) => connection.destroy(),
+      () => undefined, // there was no connection to begin with
+    );
   }
 }
 

@@ -1,9 +1,10 @@
 import { randomUUID } from 'node:crypto';
 import { type Express } from 'express';
 import supertest, { type Test } from 'supertest';
-import { type DataSource } from 'typeorm';
+import { DataSource } from 'typeorm';
 import { createApp } from '@/server/app';
 import { createDataSource } from '@/server/database/data-source';
+import { boundedDriver } from '@/server/database/pool';
 import { MembershipEntity } from '@/server/people/membership-entity';
 import { emailKeyOf, PeopleStore } from '@/server/people/people-store';
 import { PasswordHasher } from '@/server/account/password-hasher';
@@ -62,12 +63,16 @@ export function testConfiguration(databaseUrl: string, changes: Record<string, s
   });
 }
 
-/** The real application on a database of its own, with a clock the test sets. */
-export async function startTestApp(changes: Record<string, string> = {}): Promise<TestApp> {
+/** The real application on a database of its own, with a clock the test sets and, if wanted, a driver it can disturb. */
+export async function startTestApp(
+  changes: Record<string, string> = {},
+  { driver = boundedDriver }: { driver?: typeof boundedDriver } = {},
+): Promise<TestApp> {
   const database = await createTestDatabase();
   const configuration = testConfiguration(database.applicationUrl, changes);
   const guard = new StatementGuard();
-  const dataSource = createDataSource(configuration.DATABASE_URL).setOptions({ logger: guard, logging: ['query'] });
+  const { options } = createDataSource(configuration.DATABASE_URL);
+  const dataSource = new DataSource(Object.assign(options, { driver, logger: guard, logging: ['query'] }));
   await dataSource.initialize();
   let now = new Date('2026-12-09T22:00:00.000Z');
   const clock = { now: () => now, set: (instant: string) => void (now = new Date(instant)) };
