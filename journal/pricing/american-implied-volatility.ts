@@ -16,7 +16,7 @@ export type AmericanImplied =
     };
 
 /** Deviations over the life between which volatilities are looked for. */
-const LEAST_DEVIATION = 1e-6;
+const LEAST_DEVIATION = 1e-7;
 const MOST_DEVIATION = 18;
 const STEPS = 200;
 
@@ -37,13 +37,25 @@ export function americanImpliedVolatility({ price, ...option }: AmericanQuestion
     americanOptionPrice({ ...option, dailyVolatility: 0 }); // refuses what no option can be
     return { kind: 'none', bound: 'no-time-left', limit: exercise };
   }
-  const least = priceAt(LEAST_DEVIATION);
-  const most = priceAt(MOST_DEVIATION);
+  const least = priceAt(0);
   if (price < least) return { kind: 'none', bound: 'below-exercise-value', limit: least };
   if (price === least) return { kind: 'none', bound: 'exercise-value', limit: least };
-  if (!(price < most)) return { kind: 'none', bound: 'above-maximum', limit: most };
-  let [low, high] = [LEAST_DEVIATION, MOST_DEVIATION];
-  let [lowGap, highGap] = [least - price, most - price];
+  const gapAt = (deviation: number) => priceAt(deviation) - price;
+  // Outwards from the deviation that at the money would be the answer: prices near the ends are slow.
+  let low = within((Math.sqrt(2 * Math.PI) * (price - exercise)) / spotPrice);
+  let lowGap = gapAt(low);
+  let [high, highGap] = [low, lowGap];
+  while (lowGap > 0 && low > LEAST_DEVIATION) {
+    [high, highGap] = [low, lowGap];
+    low = within(low / 2);
+    lowGap = gapAt(low);
+  }
+  while (highGap < 0) {
+    if (high === MOST_DEVIATION) return { kind: 'none', bound: 'above-maximum', limit: highGap + price };
+    [low, lowGap] = [high, highGap];
+    high = within(high * 2);
+    highGap = gapAt(high);
+  }
   for (let step = 0; step < STEPS && high - low > 1e-12 * high; step += 1) {
     const secant = (low * highGap - high * lowGap) / (highGap - lowGap);
     const isEven = step % 3 === 2 || !(secant > low && secant < high);
@@ -56,3 +68,5 @@ export function americanImpliedVolatility({ price, ...option }: AmericanQuestion
   }
   return { kind: 'found', dailyVolatility: (low + high) / 2 / root };
 }
+
+const within = (deviation: number) => Math.min(MOST_DEVIATION, Math.max(LEAST_DEVIATION, deviation));

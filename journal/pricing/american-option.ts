@@ -1,6 +1,6 @@
 import { DomainError } from '@/journal/errors/domain-error';
 import { gridValue } from '@/journal/pricing/american-grid';
-import { type UnitPutValue, heldPutPrice, unitPutValue } from '@/journal/pricing/american-put';
+import { type UnitPutValue, unitPutPrice, unitPutValue } from '@/journal/pricing/american-put';
 import { certainValue } from '@/journal/pricing/certain-exercise';
 import { type CashDividend, escrowedSpot } from '@/journal/pricing/escrowed-spot';
 import {
@@ -9,7 +9,7 @@ import {
   europeanOptionValue,
   type OptionValue,
 } from '@/journal/pricing/european-option';
-import { type BoundaryScheme } from '@/journal/pricing/exercise-boundary';
+import { type BoundaryScheme, type UnitPut } from '@/journal/pricing/exercise-boundary';
 
 /** An option that can be exercised at any time, on the two clocks of {@link EuropeanOption}. */
 export interface AmericanOption extends EuropeanOption {
@@ -26,15 +26,27 @@ export type DividendModel = 'spot' | 'escrowed';
 export interface AmericanOptionValue extends OptionValue {
   /** Exercising at once is worth as much as anything else. */
   readonly exerciseNow: boolean;
-  /** At and beyond this price of the underlying it is exercised now; null where that is never, or where dividends or two edges leave no
-   *  single price. */
+  /** At and beyond this price of the underlying it is exercised now; null where that is never, where dividends or two edges leave no
+   *  single price, and where no scheme settles on it (rates far above the deviation). */
   readonly exerciseBoundary: number | null;
 }
 
 /** Prices within 5e-6 of the spot price (1e-6 up to half a year): for many options at once. */
-export const fastScheme: BoundaryScheme = { intervals: 6, quadrature: 8, iterations: 2, priceQuadrature: 16 };
+export const fastScheme: BoundaryScheme = {
+  intervals: 6,
+  quadrature: 8,
+  iterations: 2,
+  priceQuadrature: 16,
+  tailWithin: 1e-2,
+};
 /** Within 1e-6 of the spot price over years, 1e-7 over weeks. */
-export const fineScheme: BoundaryScheme = { intervals: 10, quadrature: 16, iterations: 4, priceQuadrature: 32 };
+export const fineScheme: BoundaryScheme = {
+  intervals: 10,
+  quadrature: 16,
+  iterations: 4,
+  priceQuadrature: 32,
+  tailWithin: 2e-3,
+};
 
 /** Rates over the life, and deviations of it, beyond which no market lies and no scheme was measured. */
 const LARGEST_RATE = 20;
@@ -47,8 +59,9 @@ const ONE_DAY_IN_YEARS = 1 / 365;
  * Price of an American option. Variance runs by sessions and money by years: between now and expiry both are taken to pass in step.
  * @param option see {@link AmericanOption}; all of it finite, prices above 0, volatility, sessions and years 0 or more. Rates times
  *   years and the deviation over the life up to 20 in size, prices and their ratio from 1e-150 to 1e150.
- * @param scheme of the boundary, where it has one edge and there are no dividends.
- * @returns currency per share, at least what exercising brings. Within 2e-5 of the spot price with dividends.
+ * @param scheme of the boundary, where it has one edge and there are no dividends; one that does not settle gives way to the fine
+ *   one, and that to the grid.
+ * @returns currency per share, at least what exercising brings. Within 2e-5 of the larger of spot and strike, however it is worked out.
  * @throws {DomainError} `option-input-invalid` naming the field; `american-out-of-range`; with dividends as escrowedSpot.
  * @see Merton (1973), Bell J. Economics 4; put-call symmetry: McDonald and Schroder (1998), J. Computational Finance 1(3); the
  *   methods: unitPutValue and gridValue.
@@ -58,10 +71,11 @@ export function americanOptionPrice(option: AmericanOption, scheme: BoundarySche
   const { kind } = plain;
   if (kind === 'european') return Math.max(intrinsicValue(option), europeanOptionPrice(option));
   if (kind === 'certain') return certainValue(plain).price;
-  if (kind === 'grid') return gridValue(plain).price;
+  if (plain.dividends.length > 0) return gridValue(plain).price;
   const { put, price, scale } = asUnitPut(plain);
-  const held = heldPutPrice(put, price, scheme);
-  return held === null ? intrinsicValue(option) : Math.max(intrinsicValue(option), scale * held);
+  const byBoundary =
+    kind === 'grid' ? null : (unitPutPrice(put, price, scheme) ?? unitPutPrice(put, price, fineScheme));
+  return Math.max(intrinsicValue(option), scale * (byBoundary ?? gridOfPut(put, price).price));
 }
 
 /**
@@ -70,7 +84,7 @@ export function americanOptionPrice(option: AmericanOption, scheme: BoundarySche
  * @param yearsPerNextSession calendar years that pass over the next session, for theta, 0 or more; 1/365 by default.
  * @returns Greeks in the units of {@link OptionValue}. Where it is exercised now: delta 1 or -1, all else 0. Theta is a full
  *   repricing one session later; vega and rho are central differences of full repricings. The odds are those of finishing in the
- *   money at expiry, as if it were held so long.
+ *   money at expiry, as if it were held so long; with cash dividends in either model those of the escrowed one, in closed form.
  * @throws {DomainError} as {@link americanOptionPrice}.
  * @see as {@link americanOptionPrice}.
  */
@@ -202,14 +216,22 @@ interface AtSpot {
 
 function atSpot(plain: PlainOption, scheme: BoundaryScheme): AtSpot {
   if (plain.kind === 'certain') return { ...certainValue(plain), boundary: null };
-  if (plain.kind === 'grid') return { ...gridValue(plain), boundary: null };
+  if (plain.dividends.length > 0) return { ...gridValue(plain), boundary: null };
   const { put, price, scale } = asUnitPut(plain);
-  return unscaled(plain, unitPutValue(put, price, scheme), { price, scale });
+  const byBoundary =
+    plain.kind === 'grid' ? null : (unitPutValue(put, price, scheme) ?? unitPutValue(put, price, fineScheme));
+  return unscaled(plain, byBoundary ?? gridOfPut(put, price), { price, scale });
+}
+
+/** A call too is put on the grid as a put, whose value has a bound: several times as accurate on long lives. */
+function gridOfPut(put: UnitPut, price: number): Omit<UnitPutValue, 'boundary'> & { readonly boundary: null } {
+  const grid = gridValue({ ...put, type: 'put', spotPrice: price, strikePrice: 1, dividends: [], model: 'spot' });
+  return { price: grid.price, slope: grid.delta, bend: grid.gamma, isExercised: grid.isExercised, boundary: null };
 }
 
 function unscaled(
   { type, spotPrice, strikePrice }: PlainOption,
-  unit: UnitPutValue,
+  unit: Omit<UnitPutValue, 'boundary'> & { readonly boundary: number | null },
   { price, scale }: { price: number; scale: number },
 ): AtSpot {
   const { isExercised, boundary } = unit;
@@ -219,7 +241,7 @@ function unscaled(
       delta: unit.slope,
       gamma: unit.bend / strikePrice,
       isExercised,
-      boundary: boundary * strikePrice,
+      boundary: boundary === null ? null : boundary * strikePrice,
     };
   }
   return {
@@ -227,7 +249,7 @@ function unscaled(
     delta: unit.price - price * unit.slope,
     gamma: (price * price * unit.bend) / spotPrice,
     isExercised,
-    boundary: strikePrice / boundary,
+    boundary: boundary === null ? null : strikePrice / boundary,
   };
 }
 

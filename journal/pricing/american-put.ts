@@ -25,11 +25,13 @@ const BEND_STEP = 1e-3;
 /**
  * Value of an American put with one exercise boundary: the European value and what the right to exercise early adds.
  * @param put see exerciseBoundary. @param price of the underlying in strikes, above 0.
+ * @returns null where the scheme does not settle on a boundary.
  * @see Kim (1990), Review of Financial Studies 3(4), 547-572, for the premium as an integral over the boundary; numerically as in
  *   Andersen, Lake and Offengenden (2016), section 5.
  */
-export function unitPutValue(put: UnitPut, price: number, scheme: BoundaryScheme): UnitPutValue {
+export function unitPutValue(put: UnitPut, price: number, scheme: BoundaryScheme): UnitPutValue | null {
   const boundary = exerciseBoundary(put, scheme);
+  if (!boundary.isSettled) return null;
   const { now } = boundary;
   if (price <= now) return { price: 1 - price, slope: -1, bend: 0, isExercised: true, boundary: now };
   const { value, slope } = held(put, { price, boundary, points: scheme.priceQuadrature });
@@ -41,10 +43,12 @@ export function unitPutValue(put: UnitPut, price: number, scheme: BoundaryScheme
   return { price: Math.max(value, 1 - price), slope, bend, isExercised: false, boundary: now };
 }
 
-/** The price alone, for speed; null where it is exercised now. */
-export function heldPutPrice(put: UnitPut, price: number, scheme: BoundaryScheme): number | null {
+/** The price alone, for speed; null as in unitPutValue. */
+export function unitPutPrice(put: UnitPut, price: number, scheme: BoundaryScheme): number | null {
   const boundary = exerciseBoundary(put, scheme);
-  return price <= boundary.now ? null : held(put, { price, boundary, points: scheme.priceQuadrature }).value;
+  if (!boundary.isSettled) return null;
+  if (price <= boundary.now) return 1 - price;
+  return Math.max(1 - price, held(put, { price, boundary, points: scheme.priceQuadrature }).value);
 }
 
 interface Held {

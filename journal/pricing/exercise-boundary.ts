@@ -22,6 +22,8 @@ export interface BoundaryScheme {
   readonly iterations: number;
   /** Points of the quadrature in the price. */
   readonly priceQuadrature: number;
+  /** Most that the last coefficients may be of the largest for the boundary to count as resolved. */
+  readonly tailWithin: number;
 }
 
 /** The price of the underlying, in strikes, at and below which a put is exercised, by time left. */
@@ -32,6 +34,8 @@ export interface ExerciseBoundary {
   readonly coefficients: Float64Array;
   /** With the whole life left. */
   readonly now: number;
+  /** The iteration came to rest on a curve that the polynomial follows: else the boundary is no good. */
+  readonly isSettled: boolean;
 }
 
 /**
@@ -45,6 +49,7 @@ export interface ExerciseBoundary {
 export function exerciseBoundary(put: UnitPut, scheme: BoundaryScheme): ExerciseBoundary {
   const { interest, yieldOverLife } = put;
   const atExpiry = yieldOverLife > 0 ? Math.min(1, interest / yieldOverLife) : 1;
+  const lowest = perpetualBoundary(put);
   const { intervals } = scheme;
   const values = new Float64Array(intervals + 1);
   const boundaries = new Float64Array(intervals + 1);
@@ -53,25 +58,63 @@ export function exerciseBoundary(put: UnitPut, scheme: BoundaryScheme): Exercise
   for (let index = 1; index <= intervals; index += 1) {
     const root = rootAt(index, intervals);
     // The boundary falls as time is left: each point starts from the one before it.
-    guess = quadraticStart(put, root * root, { guess: guess * Math.exp(-put.deviation / intervals), atExpiry });
+    guess = quadraticStart(put, root * root, {
+      guess: Math.max(lowest, guess * Math.exp(-put.deviation / intervals)),
+      lowest,
+      atExpiry,
+    });
     boundaries[index] = guess;
     values[index] = Math.log(guess / atExpiry) ** 2;
   }
   fitChebyshev(values, coefficients);
+  let moved = 0;
   for (let iteration = 0; iteration < scheme.iterations; iteration += 1) {
+    moved = 0;
     for (let index = 1; index <= intervals; index += 1) {
       const root = rootAt(index, intervals);
       const boundary = improvedBoundary(
         put,
-        { root, boundary: boundaries[index] ?? 0, atExpiry, coefficients },
+        { root, boundary: boundaries[index] ?? 0, lowest, atExpiry, coefficients },
         scheme,
       );
+      moved = Math.max(moved, Math.abs(Math.log(boundary / (boundaries[index] ?? 0))));
       boundaries[index] = boundary;
       values[index] = Math.log(boundary / atExpiry) ** 2;
     }
     fitChebyshev(values, coefficients);
   }
-  return { atExpiry, coefficients, now: boundaries[intervals] ?? 0 };
+  const isSettled = isAtRest(put, moved) && tailOf(coefficients) <= scheme.tailWithin;
+  return { atExpiry, coefficients, now: boundaries[intervals] ?? 0, isSettled };
+}
+
+/** Of the last iteration, in deviations over the life; and that times the rates, since on those the worth of early exercise rests. */
+const LARGEST_MOVE = 0.05;
+const LARGEST_MOVE_BY_RATES = 2e-4;
+
+/** Also false for NaN. A move of exactly nothing is that of points that are stuck. */
+function isAtRest({ interest, yieldOverLife, deviation }: UnitPut, moved: number): boolean {
+  const move = moved / deviation;
+  return (
+    move > 0 && move <= LARGEST_MOVE && move * (Math.abs(interest) + Math.abs(yieldOverLife)) <= LARGEST_MOVE_BY_RATES
+  );
+}
+
+/** The larger of the last two coefficients as a share of the largest of all. */
+function tailOf(coefficients: Float64Array): number {
+  let largest = 0;
+  for (const coefficient of coefficients) largest = Math.max(largest, Math.abs(coefficient));
+  const [beforeLast = 0, last = 0] = coefficients.subarray(-2);
+  return Math.max(Math.abs(beforeLast), Math.abs(last)) / largest;
+}
+
+/** The boundary of a put that never expires: below that of any other. Merton (1973). */
+function perpetualBoundary({ interest, yieldOverLife, deviation }: UnitPut): number {
+  const variance = deviation * deviation;
+  const ratio = (2 * (interest - yieldOverLife)) / variance;
+  const root = Math.sqrt((ratio - 1) ** 2 + (8 * interest) / variance);
+  // The negative power, without the difference of two near numbers.
+  const power = ratio > 1 ? (1 - ratio - root) / 2 : (-4 * interest) / variance / (1 - ratio + root);
+  return power / (power - 1);
 }
 
 /** ln of the boundary, in strikes, at a square root of time left from 0 to 1. */
@@ -85,6 +128,7 @@ const rootAt = (index: number, intervals: number) => (1 - Math.cos((Math.PI * in
 interface Point {
   readonly root: number;
   readonly boundary: number;
+  readonly lowest: number;
   readonly atExpiry: number;
   readonly coefficients: Float64Array;
 }
@@ -97,7 +141,7 @@ function improvedBoundary(
   point: Point,
   scheme: BoundaryScheme,
 ): number {
-  const { root, boundary, atExpiry, coefficients } = point;
+  const { root, boundary, lowest, atExpiry, coefficients } = point;
   const time = root * root;
   const carry = interest - yieldOverLife;
   const spread = deviation * root;
@@ -129,8 +173,8 @@ function improvedBoundary(
   const wanted = (growth * n) / d;
   const slope = (growth * bend * (lowerDensity * d - upperDensity * n)) / (d * d);
   const stepped = boundary - (wanted - boundary) / (slope - 1);
-  if (stepped > 0 && stepped <= atExpiry) return stepped;
-  return wanted > 0 && wanted < Infinity ? Math.min(wanted, atExpiry) : boundary;
+  if (stepped >= lowest && stepped <= atExpiry) return stepped;
+  return wanted > 0 && wanted < Infinity ? Math.max(lowest, Math.min(wanted, atExpiry)) : boundary;
 }
 
 const START_STEPS = 6;
@@ -138,7 +182,7 @@ const START_TOLERANCE = 1e-5;
 
 /** The boundary by the quadratic approximation with so much time left, by Newton's method from a guess; from above 0 to atExpiry. */
 function quadraticStart({ interest, yieldOverLife, deviation }: UnitPut, time: number, start: StartAt): number {
-  const { guess, atExpiry } = start;
+  const { guess, lowest, atExpiry } = start;
   const variance = deviation * deviation;
   const spread = deviation * Math.sqrt(time);
   const carry = interest - yieldOverLife;
@@ -154,7 +198,7 @@ function quadraticStart({ interest, yieldOverLife, deviation }: UnitPut, time: n
     // What exercising brings beyond holding, by the approximation.
     const gap = 1 - strikeDiscount * normalCumulative(spread - upper) - price * held * (1 - 1 / power);
     const slope = (spotDiscount * normalDensity(upper)) / (power * spread) - held * (1 - 1 / power);
-    const next = Math.min(atExpiry, Math.max(price / 4, price - gap / slope));
+    const next = Math.min(atExpiry, Math.max(lowest, price / 4, price - gap / slope));
     const isThere = Math.abs(next - price) <= START_TOLERANCE * price;
     if (next > 0) price = next;
     if (isThere) break;
@@ -165,6 +209,7 @@ function quadraticStart({ interest, yieldOverLife, deviation }: UnitPut, time: n
 interface StartAt {
   /** Above 0. */
   readonly guess: number;
+  readonly lowest: number;
   readonly atExpiry: number;
 }
 

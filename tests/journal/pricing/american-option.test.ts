@@ -1,5 +1,11 @@
 import * as fc from 'fast-check';
-import { americanOptionPrice, americanOptionValue, type AmericanOption } from '@/journal/pricing/american-option';
+import {
+  americanOptionPrice,
+  americanOptionValue,
+  type AmericanOption,
+  fastScheme,
+  fineScheme,
+} from '@/journal/pricing/american-option';
 import { americanImpliedVolatility } from '@/journal/pricing/american-implied-volatility';
 import { exerciseBeforeDividend } from '@/journal/pricing/exercise-before-dividend';
 import { europeanOptionPrice } from '@/journal/pricing/european-option';
@@ -115,8 +121,32 @@ describe('americanOptionPrice', () => {
 
   it('takes a negative rate above a lower yield, where there are two edges, from the grid', () => {
     const option = { ...put, ratePerYear: -0.02, dividendYield: -0.06, spotPrice: 95, years: 1, sessions: 252 };
-    expect(Math.abs(americanOptionPrice(option) - binomialAmerican(option, 1000))).toBeLessThan(2e-3);
+    expect(Math.abs(americanOptionPrice(option) - binomialAmerican(option, 1000))).toBeLessThan(1e-3);
     expect(americanOptionPrice(option)).toBeGreaterThan(europeanOptionPrice(option));
+  });
+
+  it.each([
+    // Rates far above the deviation, where the iteration does not come to rest: held to a tree.
+    { interest: 1.4802819354487584, dividend: 0.06953391177215763, deviation: 0.5692707436599923, price: 1.0388 },
+    { interest: 0.40208072705520315, dividend: 0.0041374, deviation: 0.2302181872359844, price: 1.1284 },
+    { interest: 0.02396967412850445, dividend: -0.19302702379500933, deviation: 1.2402904031607789, price: 0.88 },
+    { interest: 0.0069971598352605476, dividend: 0.00214939, deviation: 0.0026761653530284384, price: 0.9994 },
+  ])('gives way to the grid where no boundary settles: rates $interest and $dividend, deviation $deviation', (one) => {
+    const option: AmericanOption = {
+      type: 'put',
+      spotPrice: 100 * one.price,
+      strikePrice: 100,
+      dailyVolatility: one.deviation,
+      sessions: 1,
+      years: 1,
+      ratePerYear: one.interest,
+      dividendYield: one.dividend,
+    };
+    const tree = binomialAmerican(option, 2000);
+    // The tree swings from size to size where drift is large: by so much it is unsure itself.
+    const unsure = Math.abs(tree - binomialAmerican(option, 1000));
+    for (const scheme of [fastScheme, fineScheme])
+      expect(Math.abs(americanOptionPrice(option, scheme) - tree)).toBeLessThan(2e-5 * 100 + unsure);
   });
 
   it('waits for the best moment where nothing is uncertain', () => {

@@ -2,6 +2,7 @@ import { createConnection, type Connection } from 'mysql2/promise';
 import { verifyChain } from '@/scripts/verify-chain.mjs';
 import { type Endpoint } from '@/shared/contract/define-endpoint';
 import { entryEndpoints } from '@/shared/entries/entry-endpoints';
+import { chainRows } from '@/tests/server/support/chain-rows';
 import { addDraft, addSealed, addUnderlying, completePlan } from '@/tests/server/support/journal';
 import { methodOf, sampleBody } from '@/tests/server/support/sample-calls';
 import { startTestApp, type TestApp, type TestPerson } from '@/tests/server/support/test-app';
@@ -26,14 +27,7 @@ afterAll(async () => {
   await app.stop();
 });
 
-const chainOf = async (traderId: string): Promise<Parameters<typeof verifyChain>[0]> =>
-  app.dataSource.query(
-    `SELECT f.desk_id AS deskId, f.trader_id AS traderId, f.sequence, f.previous_hash AS previousHash, f.hash, f.commitment,
-            f.sealed_at_microseconds AS sealedAtMicroseconds, c.salt, c.payload
-     FROM sealed_forecast f LEFT JOIN sealed_content c ON c.desk_id = f.desk_id AND c.forecast_id = f.id
-     WHERE f.trader_id = ? ORDER BY f.sequence`,
-    [traderId],
-  );
+const chainOf = (traderId: string) => chainRows((sql, values) => app.dataSource.query(sql, values), traderId);
 const frozen = async () =>
   JSON.stringify(await app.dataSource.query('CHECKSUM TABLE sealed_forecast, sealed_content, entry, fill, outcome'));
 

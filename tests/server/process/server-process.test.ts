@@ -1,86 +1,25 @@
-import { type ChildProcess, spawn } from 'node:child_process';
 import { randomUUID } from 'node:crypto';
-import { once } from 'node:events';
-import { createServer } from 'node:net';
-import path from 'node:path';
 import { createConnection, type Connection } from 'mysql2/promise';
 import { apiRoot, requestHeader } from '@/shared/contract/request-headers';
+import { serverProcesses, type ServerProcesses, statusOf, until } from '@/tests/server/support/server-process';
 import { createTestDatabase, type TestDatabase } from '@/tests/server/support/test-database';
 
 jest.setTimeout(60_000);
 
-const root = path.resolve(__dirname, '../../..');
 let database: TestDatabase;
 let owner: Connection;
-const children = new Set<ChildProcess>();
+let processes: ServerProcesses;
 
 beforeEach(async () => {
   database = await createTestDatabase();
+  processes = serverProcesses(database);
   owner = await createConnection(database.migrationUrl);
 });
 afterEach(async () => {
-  for (const child of children) child.kill('SIGKILL');
-  children.clear();
+  processes.endAll();
   await owner.end();
   await database.drop();
 });
-
-async function freePort(): Promise<number> {
-  const server = createServer().listen(0, '127.0.0.1');
-  await once(server, 'listening');
-  const address = server.address();
-  await new Promise((resolve) => server.close(resolve));
-  if (address === null || typeof address === 'string') throw new Error('A TCP server has a port.');
-  return address.port;
-}
-
-interface Running {
-  readonly child: ChildProcess;
-  readonly origin: string;
-  readonly output: () => string;
-  readonly ended: Promise<number | null>;
-}
-
-/** The built server in a process of its own; nothing of this process's settings reaches it. */
-async function launch(changes: Readonly<Record<string, string>> = {}): Promise<Running> {
-  const port = await freePort();
-  const origin = `http://127.0.0.1:${port}`;
-  const child = spawn(process.execPath, [path.join(root, 'build/server/index.js')], {
-    cwd: root,
-    stdio: ['ignore', 'pipe', 'pipe'],
-    env: {
-      PATH: process.env.PATH,
-      TZ: 'UTC',
-      NODE_ENV: 'test',
-      PORT: String(port),
-      PUBLIC_ORIGIN: origin,
-      DATABASE_URL: database.applicationUrl,
-      SESSION_SECRET: 'a session secret for tests, 32 and more',
-      PASSWORD_PEPPER: 'a password pepper for tests, 32 and more',
-      BCRYPT_COST: '4',
-      OPEN_SIGN_UP: 'yes',
-      WEB_ROOT: 'tests/server/support/web-root',
-      ...changes,
-    },
-  });
-  children.add(child);
-  let output = '';
-  child.stdout.on('data', (part: Buffer) => (output += part.toString()));
-  child.stderr.on('data', (part: Buffer) => (output += part.toString()));
-  const ended = once(child, 'close').then(([code]: (number | null)[]) => code ?? null);
-  return { child, origin, output: () => output, ended };
-}
-
-/** Asks again and again until the answer is the wanted one. */
-async function until(isSo: () => Promise<boolean>): Promise<void> {
-  while (!(await isSo())) await new Promise((resolve) => setImmediate(resolve));
-}
-const statusOf = (address: string): Promise<number> =>
-  fetch(address, { headers: { Connection: 'close' } }).then(
-    ({ status }) => status,
-    () => 0,
-  );
-const isReady = (origin: string) => () => statusOf(`${origin}/readyz`).then((status) => status === 200);
 
 const signUp = (origin: string, email: string) =>
   fetch(`${origin}${apiRoot}/account/sign-up`, {
@@ -111,8 +50,7 @@ const emailsOf = (number: number) => Array.from({ length: number }, () => `${ran
 
 describe('the server process', () => {
   it('on SIGTERM answers every request under way, keeps what it said it kept, takes no new ones and exits 0', async () => {
-    const server = await launch();
-    await until(isReady(server.origin));
+    const server = await processes.launchReady();
     const emails = emailsOf(6);
     const answers = await holdSignUps(server.origin, emails);
     server.child.kill('SIGTERM');
@@ -126,8 +64,7 @@ describe('the server process', () => {
   });
 
   it('on a second signal ends at once with 1', async () => {
-    const server = await launch();
-    await until(isReady(server.origin));
+    const server = await processes.launchReady();
     const answers = await holdSignUps(server.origin, emailsOf(1));
     server.child.kill('SIGTERM');
     await until(async () => (await statusOf(`${server.origin}/readyz`)) !== 200);
@@ -138,8 +75,7 @@ describe('the server process', () => {
   });
 
   it('is not ready while a migration is missing, and says no more than that', async () => {
-    const server = await launch();
-    await until(isReady(server.origin));
+    const server = await processes.launchReady();
     await owner.query('DELETE FROM migration ORDER BY id DESC LIMIT 1');
     const answer = await fetch(`${server.origin}/readyz`);
     expect([answer.status, await answer.json()]).toEqual([503, { status: 'not ready' }]);
@@ -157,15 +93,14 @@ describe('the server process', () => {
     ['another time zone', () => ({ TZ: 'America/New_York' }), 'TZ=UTC'],
     ['production over plain http', () => ({ NODE_ENV: 'production' }), 'PUBLIC_ORIGIN'],
   ] as const)('refuses to start with %s and names it', async (_, changes, said) => {
-    const server = await launch(changes());
+    const server = await processes.launch(changes());
     expect(await server.ended).toBe(1);
     expect(server.output()).toContain(said);
     expect(server.output()).not.toContain(new URL(database.applicationUrl).password);
   });
 
   it('names nobody in its log but by number', async () => {
-    const server = await launch({ LOG_LEVEL: 'debug' });
-    await until(isReady(server.origin));
+    const server = await processes.launchReady({ changes: { LOG_LEVEL: 'debug' } });
     const [email = ''] = emailsOf(1);
     expect(await signUp(server.origin, email)).toBe(201);
     server.child.kill('SIGTERM');

@@ -143,9 +143,9 @@ export function cookieOf(setCookie: readonly string[] | undefined): string {
   return cookie;
 }
 
-/** Calls as our own pages make them. */
+/** Calls as our own pages make them, to the application in this process or to the origin of another. */
 export function callsOf(
-  app: Express,
+  app: Express | string,
   cookie: string | null,
 ): Pick<TestPerson, 'get' | 'post' | 'put' | 'patch' | 'delete'> {
   const call =
